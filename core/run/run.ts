@@ -1,0 +1,36 @@
+import type { Doubt } from '../notice/doubt.ts';
+import type { Refusal } from '../notice/refusal.ts';
+
+/** What the sensor column holds: pH as the meter shows it, or millivolts. */
+export type ReadingKind = 'pH' | 'mV';
+
+/** Whether a row takes part in the fit. */
+export type RowDecision =
+  | { readonly use: 'used' }
+  | { readonly use: 'excluded'; readonly by: 'rule' | 'person'; readonly why: string };
+
+/** One row of a run; rows keep the order of the file. */
+export interface RunRow {
+  /** Line of the source file, counted from 1. */
+  readonly line: number;
+  /** Titrant volume as the burette showed it, mL. */
+  readonly volume_mL: number;
+  /** Reading in the unit of the run: pH, or mV. */
+  readonly reading: number;
+  readonly decision: RowDecision;
+}
+
+/**
+ * One titration, from one file or from part of one. Every data row of the
+ * source is in `rows` or in `notAccepted`; none disappears.
+ */
+export interface Run {
+  /** Label of the run: the file name, with the sample label where a file holds several. */
+  readonly name: string;
+  readonly file: string;
+  readonly readingKind: ReadingKind;
+  readonly rows: readonly RunRow[];
+  /** One refusal per row that could not be used, with its line and column. */
+  readonly notAccepted: readonly Refusal[];
+  readonly doubts: readonly Doubt[];
+}
