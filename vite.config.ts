@@ -1,0 +1,68 @@
+import { fileURLToPath } from 'node:url';
+import react from '@vitejs/plugin-react';
+import { viteSingleFile } from 'vite-plugin-singlefile';
+import { defineConfig } from 'vitest/config';
+import { contentPolicy } from './app/build/contentPolicy.ts';
+import { singlePage } from './app/build/singlePage.ts';
+
+const fromHere = (path: string) => fileURLToPath(new URL(path, import.meta.url));
+
+/** Modes: `production` makes the served page, `single` the page as one file, `test` is Vitest's. */
+export default defineConfig(({ mode }) => {
+  const single = mode === 'single';
+  return {
+    // Tests name their files from the top; the page lives in app/.
+    root: mode === 'test' ? fromHere('.') : fromHere('app'),
+    base: './',
+    publicDir: fromHere('public'),
+    plugins: [
+      react(),
+      ...(single ? [viteSingleFile({ removeViteModuleLoader: true }), singlePage('stepwell.html')] : []),
+      contentPolicy(single),
+    ],
+    // plotly.js/lib/core is written for bundlers that provide Node's name of the global object.
+    define: { global: 'globalThis' },
+    resolve: {
+      // Styles of maps, which plotly.js asks for even where no map is drawn.
+      alias: { 'maplibre-gl/dist/maplibre-gl.css': fromHere('app/build/noMapStyles.css') },
+    },
+    // A module worker does not start from file://.
+    worker: { format: 'iife' },
+    build: {
+      target: 'es2022',
+      outDir: fromHere(single ? 'dist/single' : 'dist'),
+      emptyOutDir: true,
+      copyPublicDir: !single,
+      modulePreload: { polyfill: false },
+      chunkSizeWarningLimit: 2000,
+    },
+    preview: { host: '127.0.0.1' },
+    test: {
+      reporters: ['default', fromHere('test/summaryReporter.ts')],
+      projects: [
+        {
+          extends: true,
+          test: {
+            name: 'core',
+            environment: 'node',
+            include: ['test/{core,reference,laws,app}/**/*.test.{ts,tsx}'],
+            sequence: { groupOrder: 0 },
+          },
+        },
+        {
+          extends: true,
+          test: {
+            name: 'browser',
+            environment: 'node',
+            include: ['test/browser/**/*.test.ts'],
+            globalSetup: fromHere('test/browser/globalSetup.ts'),
+            testTimeout: 30_000,
+            hookTimeout: 30_000,
+            // After the others, so that what is awaited in the browser does not compete with them.
+            sequence: { groupOrder: 1 },
+          },
+        },
+      ],
+    },
+  };
+});
