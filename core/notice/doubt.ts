@@ -5,8 +5,11 @@ export type DoubtCode =
   // rows and columns of the file
   | 'rows-not-accepted'
   | 'volume-steps-back'
+  | 'volume-beyond-range'
   | 'reading-beyond-range'
   | 'column-guessed'
+  | 'unit-guessed'
+  | 'run-split-guessed'
   | 'delimiter-guessed'
   // the fit
   | 'too-few-points'

@@ -11,6 +11,9 @@ export type RefusalCode =
   | 'file-too-large'
   | 'file-unreadable'
   | 'table-no-columns'
+  | 'table-delimiter-unclear'
+  | 'row-wrong-width'
+  | 'row-outside-run'
   | 'cell-not-a-number'
   // sheets
   | 'sheet-not-json'

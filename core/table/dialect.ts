@@ -1,0 +1,206 @@
+import type { Doubt } from '../notice/doubt.ts';
+import type { Outcome } from '../notice/outcome.ts';
+import type { NumberMarks } from './numberMarks.ts';
+import { parseNumber } from './parseNumber.ts';
+import { quoteCell } from './quoteCell.ts';
+import { type MarksScore, scoreMarks } from './scoreMarks.ts';
+import { type Delimiter, splitCells } from './splitCells.ts';
+
+/** How a file writes its table: what parts cells, and how numbers are written. */
+export interface Dialect {
+  readonly delimiter: Delimiter;
+  readonly marks: NumberMarks;
+}
+
+export interface DialectChoice {
+  readonly dialect: Dialect;
+  /** 'delimiter-guessed' where another reading is about as good and gives other numbers. */
+  readonly doubts: readonly Doubt[];
+}
+
+interface Candidate extends Dialect, MarksScore {
+  readonly cells: readonly (readonly string[])[];
+}
+
+/** Lines that are scored: the first ones and, of a longer file, an even selection of the rest. */
+const LINES_SCORED = 2000;
+const FIRST_LINES = 500;
+
+/** Longer lines are no rows of a titration. */
+const LONGEST_LINE = 5000;
+
+/** A reading whose score comes this close to the best one cannot be told from it by the file alone. */
+const AS_GOOD = 0.97;
+
+const DELIMITERS: readonly Delimiter[] = ['\t', ';', '|', ',', 'spaces'];
+
+/**
+ * Decides delimiter, decimal mark and thousands mark together, from lines of
+ * the whole file: each combination that the file could be written in is tried
+ * on the same lines, and the one by which they read best as a table of numbers
+ * is taken. `lines` are the lines of the file without their ends.
+ *
+ * Refuses with 'table-no-columns' where no combination gives a line with two
+ * numbers, and with 'table-delimiter-unclear' where commas part cells and
+ * decimals alike.
+ */
+export function chooseDialect(lines: readonly string[], fileName: string): Outcome<DialectChoice> {
+  const numbered = selectLines(lines);
+  const sample = numbered.map((index) => lines[index]);
+  const candidates = candidatesFor(sample).sort((a, b) => b.score - a.score);
+  const best = candidates[0];
+  if (best === undefined || best.score <= 0) return { ok: false, refusals: [noColumns(lines, fileName)] };
+  const firstLine = numbered[best.dataLines[0]] + 1;
+  const dialect: Dialect = { delimiter: best.delimiter, marks: best.marks };
+
+  if (best.delimiter === ',' && commasAreBoth(best, sample)) {
+    const message = `Commas seem to part the cells and the decimals alike (line ${firstLine}: ${quoteCell(lines[firstLine - 1])}), so that the numbers cannot be told apart.`;
+    const remedy = 'Export again with semicolons or tabs between the columns, or with decimal points.';
+    return {
+      ok: false,
+      refusals: [{ code: 'table-delimiter-unclear', message, remedy, place: { file: fileName, line: firstLine } }],
+    };
+  }
+  const doubts: Doubt[] = [];
+  const rival = rivalOf(best, candidates);
+  if (rival !== undefined) doubts.push(marksDoubt(best, rival, numbered, fileName));
+  else if (couldBeOneColumn(best, sample, lines.slice(0, firstLine - 1))) doubts.push(oneColumnDoubt(lines[firstLine - 1], firstLine, fileName));
+  return { ok: true, value: { dialect, doubts } };
+}
+
+function selectLines(lines: readonly string[]): number[] {
+  const usable: number[] = [];
+  lines.forEach((line, index) => {
+    if (line.length <= LONGEST_LINE && /\d/.test(line)) usable.push(index);
+  });
+  if (usable.length <= LINES_SCORED) return usable;
+  const rest = usable.length - FIRST_LINES;
+  const taken = LINES_SCORED - FIRST_LINES;
+  return [
+    ...usable.slice(0, FIRST_LINES),
+    ...Array.from({ length: taken }, (_, at) => usable[FIRST_LINES + Math.floor((at * rest) / taken)]),
+  ];
+}
+
+function candidatesFor(sample: readonly string[]): Candidate[] {
+  const text = sample.join('\n');
+  const quoted = text.includes('"');
+  const candidates: Candidate[] = [];
+  for (const delimiter of DELIMITERS) {
+    if (!text.includes(delimiter === 'spaces' ? ' ' : delimiter)) continue;
+    const cells = splitCells(sample, delimiter);
+    for (const decimal of ['.', ','] as const) {
+      // A comma between unquoted figures cannot both part cells and stand before decimals.
+      if (decimal === ',' && (!text.includes(',') || (delimiter === ',' && !quoted))) continue;
+      for (const thousands of thousandsFor(text, delimiter, decimal)) {
+        const marks: NumberMarks = { decimal, thousands };
+        candidates.push({ delimiter, marks, cells, ...scoreMarks(cells, marks) });
+      }
+    }
+  }
+  return candidates;
+}
+
+function thousandsFor(text: string, delimiter: Delimiter, decimal: '.' | ','): readonly NumberMarks['thousands'][] {
+  const found: NumberMarks['thousands'][] = [''];
+  const other = decimal === '.' ? ',' : '.';
+  if ((other !== delimiter || text.includes('"')) && (other === ',' ? /\d,\d{3}(?!\d)/ : /\d\.\d{3}(?!\d)/).test(text)) {
+    found.push(other);
+  }
+  const blank = delimiter === 'spaces' ? /\d[\u00a0\u2009\u202f]\d{3}(?!\d)/ : /\d[ \u00a0\u2009\u202f]\d{3}(?!\d)/;
+  if (blank.test(text)) found.push(' ');
+  if (/\d['’]\d{3}(?!\d)/.test(text)) found.push("'");
+  return found;
+}
+
+/** The best other reading, if it is about as good and takes some cell for another number. */
+function rivalOf(best: Candidate, candidates: readonly Candidate[]): Candidate | undefined {
+  return candidates.find((other) => {
+    if (other === best || other.score < AS_GOOD * best.score) return false;
+    return other.delimiter !== best.delimiter || firstDifference(best, other) !== undefined;
+  });
+}
+
+function firstDifference(best: Candidate, other: Candidate): { readonly line: number; readonly cell: string } | undefined {
+  for (const line of best.dataLines) {
+    const cell = best.cells[line].find((text) => !sameValue(parseNumber(text, best.marks), parseNumber(text, other.marks)));
+    if (cell !== undefined) return { line, cell };
+  }
+  return undefined;
+}
+
+function sameValue(a: ReturnType<typeof parseNumber>, b: ReturnType<typeof parseNumber>): boolean {
+  return a === b || typeof a !== 'number' || typeof b !== 'number';
+}
+
+/**
+ * Whether "0,00,2,51" is what this file holds: nothing but whole numbers
+ * between commas, and either a piece such as "00" or "05", which is no whole
+ * number anyone writes, or a first column that stands still while the piece
+ * after it counts on.
+ */
+function commasAreBoth(best: Candidate, sample: readonly string[]): boolean {
+  if (best.marks.decimal !== '.') return false;
+  const rows = best.dataLines.map((line) => best.cells[line]);
+  if (best.dataLines.some((line) => sample[line].includes('.') || sample[line].includes('"'))) return false;
+  if (rows.some((cells) => cells.slice(1).some((cell, at) => /^\s*0\d+\s*$/.test(cell) && /\d\s*$/.test(cells[at])))) {
+    return true;
+  }
+  const fourPieces = rows.filter((cells) => cells.length === 4 && cells.every((cell) => /^\s*-?\d+\s*$/.test(cell)));
+  if (fourPieces.length < rows.length || rows.length < 4) return false;
+  let ties = 0;
+  for (let index = 1; index < rows.length; index++) {
+    const before = Number(rows[index - 1][0]);
+    const now = Number(rows[index][0]);
+    if (now < before || (now === before && Number(rows[index][1]) <= Number(rows[index - 1][1]))) return false;
+    if (now === before) ties += 1;
+  }
+  return ties > 0 && rows.every((cells) => cells[1].trim().length === rows[0][1].trim().length);
+}
+
+/** Whether every row could as well be one number with a comma in it, and no header says that there are two columns. */
+function couldBeOneColumn(best: Candidate, sample: readonly string[], above: readonly string[]): boolean {
+  if (best.delimiter !== ',' || above.some((line) => /[\p{L}].*,.*[\p{L}]/u.test(line))) return false;
+  return best.dataLines.every((line) => /^\s*[-+]?\d+,\d{3}\s*$/.test(sample[line]));
+}
+
+function noColumns(lines: readonly string[], fileName: string) {
+  const filled = lines.filter((line) => line.trim() !== '');
+  const first = lines.findIndex((line) => line.trim() !== '') + 1;
+  return {
+    code: 'table-no-columns' as const,
+    message: `No line of the file holds two numbers: ${filled.length} ${filled.length === 1 ? 'line' : 'lines'} of text, beginning with ${quoteCell(filled[0] ?? '')}.`,
+    remedy: 'Export the titration with the volume and the reading (pH or mV) of each point side by side on one line.',
+    place: { file: fileName, line: Math.max(1, first) },
+  };
+}
+
+function marksDoubt(best: Candidate, rival: Candidate, numbered: readonly number[], fileName: string): Doubt {
+  const difference = best.delimiter === rival.delimiter ? firstDifference(best, rival) : undefined;
+  const line = numbered[difference?.line ?? best.dataLines[0]] + 1;
+  const seen =
+    difference === undefined
+      ? `The columns could be parted by ${delimiterName(best.delimiter)} or by ${delimiterName(rival.delimiter)}; ${delimiterName(best.delimiter)} were taken.`
+      : `${quoteCell(difference.cell)} was read as ${parseNumber(difference.cell, best.marks)}; it could as well mean ${parseNumber(difference.cell, rival.marks)}.`;
+  return {
+    code: 'delimiter-guessed',
+    seen,
+    means: 'Nothing in the file decides between the two; with the other reading every result would be different.',
+    remedy: 'Compare a volume with the burette, and export with a clear decimal mark if it was read wrongly.',
+    place: { file: fileName, line },
+  };
+}
+
+function oneColumnDoubt(text: string, line: number, fileName: string): Doubt {
+  return {
+    code: 'delimiter-guessed',
+    seen: `${quoteCell(text)} was read as two whole numbers with a comma between them.`,
+    means: 'It could as well be a single number with a decimal or a thousands comma.',
+    remedy: 'Export with semicolons or tabs between the columns.',
+    place: { file: fileName, line },
+  };
+}
+
+function delimiterName(delimiter: Delimiter): string {
+  return { ',': 'commas', ';': 'semicolons', '\t': 'tabs', '|': 'bars', spaces: 'spaces' }[delimiter];
+}
