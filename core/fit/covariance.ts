@@ -87,7 +87,12 @@ export function covarianceOf(estimate: CovarianceEstimate, first: number, second
 }
 
 /** Singular values and right vectors of the Jacobian with unit columns, whose norms are written to `columnScales`. */
-function decomposeScaled(jacobian: Float64Array, residualCount: number, parameterCount: number, columnScales: Float64Array) {
+function decomposeScaled(
+  jacobian: Float64Array,
+  residualCount: number,
+  parameterCount: number,
+  columnScales: Float64Array,
+) {
   if (parameterCount === 0) return { singularValues: new Float64Array(0), rightVectors: new Float64Array(0) };
   const rowCount = Math.max(residualCount, parameterCount);
   const columns = new Float64Array(rowCount * (parameterCount + 1));

@@ -9,10 +9,19 @@ import { chooseDamping, isAcceptable, nextRadius, type Trial } from './trustRegi
 /** Steps refused in a row before the search gives up: each at most half as long, so the last is 1e-15 of the first. */
 const MAXIMUM_REFUSALS = 50;
 
+/**
+ * Changes of the cost below this part of it may be noise: rounding, and in an
+ * iterated model what its iteration leaves over (1e-11 in a reading of standard
+ * uncertainty 0.005 shakes the cost of 100 points by about 1e-11 of itself).
+ */
+const COST_NOISE = 1e-10;
+
 interface Point {
   readonly parameters: Float64Array;
   readonly residuals: Float64Array;
   readonly jacobian: Float64Array;
+  /** Sum of squared residuals; not finite where the model could not be computed. */
+  cost: number;
 }
 
 /**
@@ -33,6 +42,10 @@ export function solveLeastSquares(
     throw new Error(`solveLeastSquares: ${parameterCount} finite starting values wanted, got [${Array.from(start)}]`);
   }
   const settings = { ...defaultLeastSquaresOptions, ...options };
+  const limits = settings.stepLimits;
+  if (limits !== undefined && !(limits.length === parameterCount && Array.from(limits).every((limit) => limit > 0))) {
+    throw new Error(`solveLeastSquares: ${parameterCount} positive step limits wanted, got [${Array.from(limits)}]`);
+  }
   const linearise = createLineariser(residualCount, parameterCount);
   const counts = { iterations: 0, residualEvaluations: 0, derivativeEvaluations: 0 };
   let here = createPoint(problem);
@@ -40,16 +53,19 @@ export function solveLeastSquares(
   let local: Linearisation | null = null;
 
   function evaluate(point: Point): boolean {
+    if (!point.parameters.every(Number.isFinite)) return false;
     counts.residualEvaluations++;
-    return problem.residuals(point.parameters, point.residuals) && Number.isFinite(sumOfSquares(point.residuals));
+    const computed = problem.residuals(point.parameters, point.residuals);
+    point.cost = computed ? sumOfSquares(point.residuals) : Infinity;
+    return Number.isFinite(point.cost);
   }
   function differentiate(point: Point): Linearisation | null {
     counts.derivativeEvaluations++;
     if (!problem.derivatives(point.parameters, point.jacobian)) return null;
-    return linearise(point.jacobian, point.residuals, sumOfSquares(point.residuals));
+    return linearise(point.jacobian, point.residuals, point.cost);
   }
   function finish(ending: EndingCode): LeastSquaresResult {
-    const cost = ending === 'start-not-computable' ? null : sumOfSquares(here.residuals);
+    const cost = ending === 'start-not-computable' ? null : here.cost;
     return { ending, ...here, cost, rank: local === null ? 0 : local.rank, ...counts };
   }
 
@@ -62,39 +78,44 @@ export function solveLeastSquares(
   // A start at the origin says nothing about how long a step may be.
   let radius = settings.initialRadiusFactor * scaledLength(here.parameters, local.scales) || Infinity;
   let refusals = 0;
-  let ending = endingAtPoint(local, sumOfSquares(here.residuals), settings);
+  let ending = endingAtPoint(local, here.cost, settings);
   while (ending === null) {
     if (counts.iterations >= settings.iterationLimit) return finish('iteration-limit');
-    const cost = sumOfSquares(here.residuals);
-    const step = limitedStep(local, radius, settings.stepLimits);
+    const { cost } = here;
+    const step = limitedStep(local, radius, limits);
     radius = step.radius;
-    if (!addStep(here.parameters, step.change, there.parameters)) return finish(step.damped ? 'stuck' : 'step-converged');
+    if (!addStep(here.parameters, step.change, there.parameters)) {
+      return finish(step.damped ? 'stuck' : 'step-converged');
+    }
     counts.iterations++;
-    const computable = there.parameters.every(Number.isFinite) && evaluate(there);
-    let trial: Trial = { ...step, actual: computable ? fallOfCost(here.residuals, there.residuals) : null };
+    let trial: Trial = { ...step, actual: evaluate(there) ? fallOfCost(here.residuals, there.residuals) : null };
+    const drowned = isDrowned(local, trial, cost);
     let next: Linearisation | null = null;
-    const previous = local;
-    if (isAcceptable(trial)) {
+    if (drowned || isAcceptable(trial)) {
       next = differentiate(there);
       if (next === null) trial = { ...trial, actual: null };
+    }
+    ending = endingAfterTrial(local, trial, cost, scaledLength(here.parameters, local.scales), drowned, settings);
+    if (drowned && next !== null && next.attainable >= local.attainable) {
+      // Not even the slope falls any more: what is left is the noise of the model.
+      ending = 'cost-converged';
+      next = null;
     }
     radius = nextRadius(radius, trial);
     refusals = next === null ? refusals + 1 : 0;
     if (next !== null) {
       [here, there] = [there, here];
       local = next;
+      ending ??= endingAtPoint(local, here.cost, settings);
     }
-
-    ending = endingAfterTrial(previous, trial, cost, scaledLength(here.parameters, local.scales), settings);
-    if (ending === null && next !== null) ending = endingAtPoint(next, sumOfSquares(here.residuals), settings);
-    if (ending === null && refusals >= MAXIMUM_REFUSALS) ending = 'stuck';
+    if (refusals >= MAXIMUM_REFUSALS) ending ??= 'stuck';
     const progress = {
       iteration: counts.iterations,
       accepted: next !== null,
-      cost: sumOfSquares(here.residuals),
+      cost: here.cost,
       parameters: here.parameters,
     };
-    if (settings.onIteration?.(progress) === true && ending === null) ending = 'stopped';
+    if (settings.onIteration?.(progress) === true) ending ??= 'stopped';
   }
   return finish(ending);
 }
@@ -103,8 +124,10 @@ type Settings = typeof defaultLeastSquaresOptions & LeastSquaresOptions;
 
 /** Convergence that shows at a point, before any step from it. */
 function endingAtPoint(local: Linearisation, cost: number, settings: Settings): EndingCode | null {
-  const { attainable, columnCosine } = local;
+  const { attainable, columnCosine, rank } = local;
   const { gradientTolerance, residualResolution } = settings;
+  // Where no parameter has any influence, nothing has been fitted, however flat it is there.
+  if (rank === 0) return 'stuck';
   // The columns are asked one by one as well: a column that has nearly vanished
   // counts for little in the common plane, and may yet be far from orthogonal.
   if (Math.sqrt(attainable) <= gradientTolerance * Math.sqrt(cost) && columnCosine <= gradientTolerance) {
@@ -113,16 +136,26 @@ function endingAtPoint(local: Linearisation, cost: number, settings: Settings): 
   return attainable <= residualResolution ** 2 ? 'cost-converged' : null;
 }
 
+/**
+ * Whether the change of the cost is too small to be told from its own noise.
+ * Then the step is judged by the slope: it is right if less can be attained from
+ * its end than from its beginning.
+ */
+function isDrowned(local: Linearisation, { actual }: Trial, cost: number): boolean {
+  return actual !== null && local.attainable <= COST_NOISE * cost && Math.abs(actual) <= COST_NOISE * cost;
+}
+
 /** Convergence that shows by a trial step, taken or not, from a point of that cost. */
 function endingAfterTrial(
   local: Linearisation,
   trial: Trial,
   cost: number,
   scaledParameters: number,
+  drowned: boolean,
   { costTolerance, stepTolerance }: Settings,
 ): EndingCode | null {
   if (trial.actual === null) return null;
-  if (local.attainable <= costTolerance * cost && Math.abs(trial.actual) <= costTolerance * cost) {
+  if (local.attainable <= costTolerance * cost && (drowned || Math.abs(trial.actual) <= costTolerance * cost)) {
     return 'cost-converged';
   }
   // Only an undamped step tells how far the minimum is; a damped one is as short as it was told to be.
@@ -216,6 +249,7 @@ function createPoint({ parameterCount, residualCount }: LeastSquaresProblem): Po
     parameters: new Float64Array(parameterCount),
     residuals: new Float64Array(residualCount),
     jacobian: new Float64Array(residualCount * parameterCount),
+    cost: Infinity,
   };
 }
 

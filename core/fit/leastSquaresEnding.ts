@@ -17,7 +17,7 @@ export interface Ending {
   readonly message: string;
 }
 
-/** Every ending with its meaning. An engine that says nothing has ended 'stuck'. */
+/** Every ending with its meaning. Only what is shown to be a minimum is usable. */
 export const endings: Readonly<Record<EndingCode, Ending>> = {
   'gradient-converged': {
     usable: true,
@@ -41,7 +41,7 @@ export const endings: Readonly<Record<EndingCode, Ending>> = {
   },
   stuck: {
     usable: false,
-    message: 'Not converged: no step, however short, lowers the sum of squares, yet the slope there is not zero.',
+    message: 'Not converged: no step was found that lowers the sum of squares, yet this is not seen to be its minimum.',
   },
   'start-not-computable': {
     usable: false,

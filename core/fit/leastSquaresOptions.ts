@@ -38,14 +38,13 @@ export interface LeastSquaresOptions {
 }
 
 /**
- * Used where a caller says nothing. The tolerances sit well above the rounding
- * of sums over a few thousand points (about 1e-14) and far below any change of
- * a parameter that its standard uncertainty would let one see: a relative gain
- * of 1e-12 of the sum of squares is a millionth of a standard uncertainty times
- * the square root of the degrees of freedom.
+ * Used where a caller says nothing. Each of the tolerances ends a fit within a
+ * ten-millionth of a standard uncertainty of the minimum or so (times the square
+ * root of the degrees of freedom), which is finer than any use of a result and
+ * still within reach of derivatives that are good to 1e-12.
  */
 export const defaultLeastSquaresOptions: Required<Omit<LeastSquaresOptions, 'stepLimits' | 'onIteration'>> = {
-  costTolerance: 1e-14,
+  costTolerance: 1e-15,
   stepTolerance: 1e-10,
   gradientTolerance: 1e-8,
   residualResolution: 0,

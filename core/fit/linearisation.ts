@@ -85,7 +85,7 @@ export function createLineariser(residualCount: number, parameterCount: number) 
       projected[k] = sum;
       attainable += sum * sum;
     }
-    return { scales, singularValues, rightVectors, projected, rank, attainable, columnCosine };
+    return { scales: scales.slice(), singularValues, rightVectors, projected, rank, attainable, columnCosine };
   };
 }
 

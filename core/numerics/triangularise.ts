@@ -16,9 +16,9 @@ export interface Triangle {
  *   entries each. Overwritten. rowCount must be at least columnCount.
  * @param result written to.
  *
- * Own code rather than ml-matrix's QrDecomposition because that one keeps an
- * array per row and all of Q's vectors: measured at 10,000 × 5 it takes about
- * ten times as long and allocates twice the matrix at every call.
+ * Own code rather than ml-matrix's QrDecomposition, which walks down columns
+ * through one array per row and copies the matrix at every call: measured, it
+ * takes 6 to 10 times as long at 10,000 × 5 (3.8 to 6.9 ms against 0.6 ms).
  */
 export function triangularise(columns: Float64Array, rowCount: number, columnCount: number, result: Triangle): void {
   if (rowCount < columnCount) throw new Error(`triangularise: ${rowCount} rows for ${columnCount} columns`);

@@ -11,9 +11,13 @@ const wave = (cosine: Dual, sine: Dual, angle: Dual) => cosine.times(angle.cos()
 
 const chwirut: NistModel = ([b1, b2, b3], x) => b1.times(-x).exp().over(b3.times(x).plus(b2));
 const gauss: NistModel = ([b1, b2, b3, b4, b5, b6, b7, b8], x) =>
-  decay(b1, b2, x).plus(peak(b3, b4, b5, x)).plus(peak(b6, b7, b8, x));
+  decay(b1, b2, x)
+    .plus(peak(b3, b4, b5, x))
+    .plus(peak(b6, b7, b8, x));
 const lanczos: NistModel = ([b1, b2, b3, b4, b5, b6], x) =>
-  decay(b1, b2, x).plus(decay(b3, b4, x)).plus(decay(b5, b6, x));
+  decay(b1, b2, x)
+    .plus(decay(b3, b4, x))
+    .plus(decay(b5, b6, x));
 const cubicOverCubic: NistModel = ([b1, b2, b3, b4, b5, b6, b7], x) => {
   const above = b4.times(x).plus(b3).times(x).plus(b2).times(x).plus(b1);
   const below = b7.times(x).plus(b6).times(x).plus(b5).times(x).plus(1);
@@ -31,14 +35,12 @@ export const nistModels: Readonly<Record<string, NistModel>> = {
     const turn = 2 * Math.PI * x;
     const year = b2.times(Math.cos(turn / 12)).plus(b3.times(Math.sin(turn / 12)));
     const cycle = (period: Dual) => period.power(-1).times(turn);
-    return b1.plus(year).plus(wave(b5, b6, cycle(b4))).plus(wave(b8, b9, cycle(b7)));
+    return b1
+      .plus(year)
+      .plus(wave(b5, b6, cycle(b4)))
+      .plus(wave(b8, b9, cycle(b7)));
   },
-  Eckerle4: ([b1, b2, b3], x) =>
-    b1.over(b2).times(
-      square(b3.minus(x).over(b2))
-        .times(-0.5)
-        .exp(),
-    ),
+  Eckerle4: ([b1, b2, b3], x) => b1.over(b2).times(square(b3.minus(x).over(b2)).times(-0.5).exp()),
   Gauss1: gauss,
   Gauss2: gauss,
   Gauss3: gauss,
@@ -50,7 +52,13 @@ export const nistModels: Readonly<Record<string, NistModel>> = {
   Lanczos1: lanczos,
   Lanczos2: lanczos,
   Lanczos3: lanczos,
-  MGH09: ([b1, b2, b3, b4], x) => b1.times(b2.times(x).plus(x * x)).over(b3.times(x).plus(b4).plus(x * x)),
+  MGH09: ([b1, b2, b3, b4], x) =>
+    b1.times(b2.times(x).plus(x * x)).over(
+      b3
+        .times(x)
+        .plus(b4)
+        .plus(x * x),
+    ),
   MGH10: ([b1, b2, b3], x) => b1.times(b2.over(b3.plus(x)).exp()),
   MGH17: ([b1, b2, b3, b4, b5], x) => b1.plus(decay(b2, b4, x)).plus(decay(b3, b5, x)),
   Misra1a: ([b1, b2], x) => b1.minus(decay(b1, b2, x)),
