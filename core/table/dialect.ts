@@ -64,7 +64,8 @@ export function chooseDialect(lines: readonly string[], fileName: string): Outco
   const doubts: Doubt[] = [];
   const rival = rivalOf(best, candidates);
   if (rival !== undefined) doubts.push(marksDoubt(best, rival, numbered, fileName));
-  else if (couldBeOneColumn(best, sample, lines.slice(0, firstLine - 1))) doubts.push(oneColumnDoubt(lines[firstLine - 1], firstLine, fileName));
+  else if (couldBeOneColumn(best, sample, lines.slice(0, firstLine - 1)))
+    doubts.push(oneColumnDoubt(lines[firstLine - 1], firstLine, fileName));
   return { ok: true, value: { dialect, doubts } };
 }
 
@@ -104,7 +105,10 @@ function candidatesFor(sample: readonly string[]): Candidate[] {
 function thousandsFor(text: string, delimiter: Delimiter, decimal: '.' | ','): readonly NumberMarks['thousands'][] {
   const found: NumberMarks['thousands'][] = [''];
   const other = decimal === '.' ? ',' : '.';
-  if ((other !== delimiter || text.includes('"')) && (other === ',' ? /\d,\d{3}(?!\d)/ : /\d\.\d{3}(?!\d)/).test(text)) {
+  if (
+    (other !== delimiter || text.includes('"')) &&
+    (other === ',' ? /\d,\d{3}(?!\d)/ : /\d\.\d{3}(?!\d)/).test(text)
+  ) {
     found.push(other);
   }
   const blank = delimiter === 'spaces' ? /\d[\u00a0\u2009\u202f]\d{3}(?!\d)/ : /\d[ \u00a0\u2009\u202f]\d{3}(?!\d)/;
@@ -121,9 +125,14 @@ function rivalOf(best: Candidate, candidates: readonly Candidate[]): Candidate |
   });
 }
 
-function firstDifference(best: Candidate, other: Candidate): { readonly line: number; readonly cell: string } | undefined {
+function firstDifference(
+  best: Candidate,
+  other: Candidate,
+): { readonly line: number; readonly cell: string } | undefined {
   for (const line of best.dataLines) {
-    const cell = best.cells[line].find((text) => !sameValue(parseNumber(text, best.marks), parseNumber(text, other.marks)));
+    const cell = best.cells[line].find(
+      (text) => !sameValue(parseNumber(text, best.marks), parseNumber(text, other.marks)),
+    );
     if (cell !== undefined) return { line, cell };
   }
   return undefined;

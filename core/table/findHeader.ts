@@ -1,7 +1,7 @@
 import { readUnit } from '../units/readUnit.ts';
-import type { Delimiter } from './splitCells.ts';
 import type { LineFacts } from './lineFacts.ts';
 import { isMissingMark } from './missingMarks.ts';
+import type { Delimiter } from './splitCells.ts';
 
 /** What was found above the first full row of a table; lines are indices, counted from 0. */
 export interface HeaderFound {
@@ -65,7 +65,13 @@ export function findHeader(
   }
   if (unitsLine !== undefined) {
     const units = facts.cells[unitsLine].map((cell) => cell.trim());
-    return { headerLine: unitsLine, names: units, units, captions: [], rows: partial.filter((line) => line > unitsLine).reverse() };
+    return {
+      headerLine: unitsLine,
+      names: units,
+      units,
+      captions: [],
+      rows: partial.filter((line) => line > unitsLine).reverse(),
+    };
   }
   return { names: [], units: [], captions: [], rows: leadingRows(facts, above) };
 }
@@ -84,7 +90,10 @@ function leadingRows(facts: LineFacts, above: readonly number[]): number[] {
 function isUnitsRow(cells: readonly string[]): boolean {
   const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
   const units = filled.filter((cell) => readUnit(cell) !== undefined).length;
-  return units >= 1 && filled.every((cell) => readUnit(cell) !== undefined || isMissingMark(cell) || /^[[(]\W*1?[\])]$/.test(cell));
+  return (
+    units >= 1 &&
+    filled.every((cell) => readUnit(cell) !== undefined || isMissingMark(cell) || /^[[(]\W*1?[\])]$/.test(cell))
+  );
 }
 
 /** The cells of a line as column names, if it can be a header of `width` columns. */
@@ -127,7 +136,12 @@ function joinUnits(cells: readonly string[], width: number): readonly string[] |
   return names.length === width && width >= 2 ? names : undefined;
 }
 
-function captionsAbove(facts: LineFacts, above: readonly number[], headerAt: number, width: number): number | undefined {
+function captionsAbove(
+  facts: LineFacts,
+  above: readonly number[],
+  headerAt: number,
+  width: number,
+): number | undefined {
   const line = above[headerAt - 1];
   if (line === undefined || facts.kinds[line] !== 'cells' || facts.numbers[line] > 0) return undefined;
   // Tables side by side: a caption over the first column of each, nothing over the others.

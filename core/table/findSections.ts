@@ -1,6 +1,6 @@
-import type { Delimiter } from './splitCells.ts';
 import { findHeader, type HeaderFound } from './findHeader.ts';
 import type { LineFacts } from './lineFacts.ts';
+import type { Delimiter } from './splitCells.ts';
 
 /** One table as line indices, counted from 0. */
 export interface SectionFound {

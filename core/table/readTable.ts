@@ -55,7 +55,8 @@ function inFile(refusal: Refusal, fileName: string): Refusal {
 }
 
 function toSection({ header, rows, width }: SectionFound, facts: LineFacts): TableSection {
-  const fill = (cells: readonly string[]): string[] => Array.from({ length: width }, (_, column) => cells[column] ?? '');
+  const fill = (cells: readonly string[]): string[] =>
+    Array.from({ length: width }, (_, column) => cells[column] ?? '');
   return {
     width,
     ...(header.headerLine === undefined ? {} : { headerLine: header.headerLine + 1 }),
@@ -87,7 +88,8 @@ function textLines(lines: readonly string[], facts: LineFacts, sections: readonl
 function toTextLine(line: string, number: number, cells: readonly string[]): TextLine {
   const text = line.length > LONGEST_TEXT ? `${line.slice(0, LONGEST_TEXT)}…` : line.trim();
   const pair = /^[#\s]*(\p{L}[^:=]{0,60}?)\s*[:=]\s*(\S.*)$/u.exec(text);
-  if (pair !== null) return { line: number, text, key: pair[1], value: pair[2].replace(/^[\s;,\t|]+|[\s;,\t|]+$/g, '') };
+  if (pair !== null)
+    return { line: number, text, key: pair[1], value: pair[2].replace(/^[\s;,\t|]+|[\s;,\t|]+$/g, '') };
   const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
   if (filled.length >= 2 && /\p{L}/u.test(filled[0]) && cells.length <= 4) {
     return { line: number, text, key: filled[0].replace(/\s*[:=]$/, ''), value: filled.slice(1).join(' ') };

@@ -33,7 +33,9 @@ function parse(text: string, delimiter: Delimiter, fastMode: boolean): string[][
 function splitAtSpaces(line: string): readonly string[] {
   if (line.includes('"')) {
     const quoted = line.match(/"(?:[^"]|"")*"|[^ ]+/g) ?? [''];
-    return quoted.map((cell) => (/^".*"$/.test(cell) && cell.length > 1 ? cell.slice(1, -1).replaceAll('""', '"') : cell));
+    return quoted.map((cell) =>
+      /^".*"$/.test(cell) && cell.length > 1 ? cell.slice(1, -1).replaceAll('""', '"') : cell,
+    );
   }
   return line.trim().split(/ +/);
 }
@@ -45,8 +47,10 @@ function splitQuoted(lines: readonly string[], delimiter: Delimiter): readonly (
   const flush = (): void => {
     if (batch.length === 0) return;
     const parsed = parse(batch.join('\n'), delimiter, false);
-    if (parsed.length === batch.length) parsed.forEach((row, index) => void (cells[starts[index]] = flat(row)));
-    else batch.forEach((line, index) => void (cells[starts[index]] = splitAlone(line, delimiter)));
+    const agrees = parsed.length === batch.length;
+    for (let at = 0; at < batch.length; at++) {
+      cells[starts[at]] = agrees ? flat(parsed[at]) : splitAlone(batch[at], delimiter);
+    }
     starts = [];
     batch = [];
   };
