@@ -10,11 +10,14 @@ import { chooseDamping, isAcceptable, nextRadius, type Trial } from './trustRegi
 const MAXIMUM_REFUSALS = 50;
 
 /**
- * Changes of the cost below this part of it may be noise: rounding, and in an
- * iterated model what its iteration leaves over (1e-11 in a reading of standard
- * uncertainty 0.005 shakes the cost of 100 points by about 1e-11 of itself).
+ * Changes of the cost below this part of it may be noise: rounding, and what the
+ * iterations inside a model leave over (1e-11 in readings of standard
+ * uncertainty 0.005 shakes the cost of ten points by 1e-9 of itself).
  */
-const COST_NOISE = 1e-10;
+const COST_NOISE = 1e-8;
+
+/** Steps in a row after which a slope that does not fall, at half the length each time, is taken for noise. */
+const MAXIMUM_SLOPE_REFUSALS = 4;
 
 interface Point {
   readonly parameters: Float64Array;
@@ -96,18 +99,21 @@ export function solveLeastSquares(
       if (next === null) trial = { ...trial, actual: null };
     }
     ending = endingAfterTrial(local, trial, cost, scaledLength(here.parameters, local.scales), drowned, settings);
-    if (drowned && next !== null && next.attainable >= local.attainable) {
-      // Not even the slope falls any more: what is left is the noise of the model.
-      ending = 'cost-converged';
-      next = null;
+    if (drowned && next !== null) {
+      // The change of the cost says nothing here: the step is right if less is left to attain at its end.
+      const falls = next.attainable < local.attainable;
+      radius = falls ? Math.max(radius, 2 * step.length) : 0.5 * Math.min(radius, step.length);
+      if (!falls) next = null;
+    } else {
+      radius = nextRadius(radius, trial);
     }
-    radius = nextRadius(radius, trial);
     refusals = next === null ? refusals + 1 : 0;
     if (next !== null) {
       [here, there] = [there, here];
       local = next;
       ending ??= endingAtPoint(local, here.cost, settings);
     }
+    if (drowned && refusals >= MAXIMUM_SLOPE_REFUSALS) ending ??= 'cost-converged';
     if (refusals >= MAXIMUM_REFUSALS) ending ??= 'stuck';
     const progress = {
       iteration: counts.iterations,
@@ -136,11 +142,7 @@ function endingAtPoint(local: Linearisation, cost: number, settings: Settings): 
   return attainable <= residualResolution ** 2 ? 'cost-converged' : null;
 }
 
-/**
- * Whether the change of the cost is too small to be told from its own noise.
- * Then the step is judged by the slope: it is right if less can be attained from
- * its end than from its beginning.
- */
+/** Whether the change of the cost, seen and to come, is too small to be told from its noise. */
 function isDrowned(local: Linearisation, { actual }: Trial, cost: number): boolean {
   return actual !== null && local.attainable <= COST_NOISE * cost && Math.abs(actual) <= COST_NOISE * cost;
 }
