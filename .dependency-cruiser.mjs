@@ -83,6 +83,13 @@ export default {
       from: { path: '^core/', pathNot: '^core/index\\.ts$' },
       to: { path: '^core/index\\.ts$' },
     },
+    {
+      name: 'core-known-folders',
+      comment: 'A new folder of core/ needs its place among the layers before anything stands in it.',
+      severity: 'error',
+      from: { path: '^core/', pathNot: `^core/((${[...allowedFrom.keys()].join('|')})/|(index|platform\\.d)\\.ts$)` },
+      to: {},
+    },
     ...layers,
     {
       name: 'core-no-platform',

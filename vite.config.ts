@@ -45,7 +45,8 @@ export default defineConfig(({ mode }) => {
           test: {
             name: 'core',
             environment: 'node',
-            include: ['test/{core,reference,laws,app}/**/*.test.{ts,tsx}'],
+            include: ['test/**/*.test.{ts,tsx}'],
+            exclude: ['test/browser/**'],
             sequence: { groupOrder: 0 },
           },
         },
