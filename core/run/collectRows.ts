@@ -34,8 +34,8 @@ export function collectRows(
 ): CollectedRows {
   const rows: RunRow[] = [];
   const notAccepted: Refusal[] = [];
-  const volumes = columns.values[group.volume];
-  const readings = columns.values[group.reading];
+  const volumes = columns.section.values[group.volume];
+  const readings = columns.section.values[group.reading];
   for (const index of indices) {
     const source = columns.section.rows[index];
     const misfit = widthRefusal(columns, source, delimiter, file);

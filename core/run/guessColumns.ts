@@ -11,6 +11,9 @@ const TYPICAL_SPAN_MV = 50;
 /** A first value up to this share of the largest counts as "starts at zero". */
 const NEARLY_ZERO = 0.02;
 
+/** With fewer points than this there are no habits to see; volumes are written first. */
+const FEW = 3;
+
 /**
  * The pair of columns that behave most like volume and reading. Volumes do not
  * step back, start at zero and go by regular doses; readings lie in 0–14 or run
@@ -35,7 +38,7 @@ export function guessColumns(
         volumeLikeness(statistics[volume]) +
         readingLikeness(statistics[reading]) +
         (reading === volume + 1 ? 0.1 : 0) +
-        (volume < reading ? 0.05 : 0);
+        (volume < reading ? (statistics[volume].count < FEW ? 2 : 0.05) : 0);
       if (score > bestScore) {
         best = { volume, reading };
         bestScore = score;

@@ -20,7 +20,7 @@ const NEAR = 0.1;
 export function splitRows(columns: SectionColumns, group: ColumnGroup): readonly RowGroup[] {
   const labelled = byLabel(columns, group.sample);
   return labelled.flatMap(({ label, rows }) => {
-    const parts = byRestart(columns.values[group.volume], rows);
+    const parts = byRestart(columns.section.values[group.volume], rows);
     return parts.map((part, index) => ({
       ...(label === undefined ? {} : { label: parts.length > 1 ? `${label} ${index + 1}` : label }),
       rows: part,

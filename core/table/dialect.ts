@@ -1,5 +1,7 @@
 import type { Doubt } from '../notice/doubt.ts';
 import type { Outcome } from '../notice/outcome.ts';
+import { commasAreBoth } from './commasAreBoth.ts';
+import { longestRow } from './longestRow.ts';
 import type { NumberMarks } from './numberMarks.ts';
 import { parseNumber } from './parseNumber.ts';
 import { quoteCell } from './quoteCell.ts';
@@ -26,9 +28,6 @@ interface Candidate extends Dialect, MarksScore {
 const LINES_SCORED = 2000;
 const FIRST_LINES = 500;
 
-/** Longer lines are no rows of a titration. */
-const LONGEST_LINE = 5000;
-
 /** A reading whose score comes this close to the best one cannot be told from it by the file alone. */
 const AS_GOOD = 0.97;
 
@@ -53,7 +52,9 @@ export function chooseDialect(lines: readonly string[], fileName: string): Outco
   const firstLine = numbered[best.dataLines[0]] + 1;
   const dialect: Dialect = { delimiter: best.delimiter, marks: best.marks };
 
-  if (best.delimiter === ',' && commasAreBoth(best, sample)) {
+  const dataLines = best.dataLines.map((at) => sample[at]);
+  const dataCells = best.dataLines.map((at) => best.cells[at]);
+  if (best.delimiter === ',' && best.marks.decimal === '.' && commasAreBoth(dataLines, dataCells)) {
     const message = `Commas seem to part the cells and the decimals alike (line ${firstLine}: ${quoteCell(lines[firstLine - 1])}), so that the numbers cannot be told apart.`;
     const remedy = 'Export again with semicolons or tabs between the columns, or with decimal points.';
     return {
@@ -72,7 +73,7 @@ export function chooseDialect(lines: readonly string[], fileName: string): Outco
 function selectLines(lines: readonly string[]): number[] {
   const usable: number[] = [];
   lines.forEach((line, index) => {
-    if (line.length <= LONGEST_LINE && /\d/.test(line)) usable.push(index);
+    if (line.length <= longestRow && /\d/.test(line)) usable.push(index);
   });
   if (usable.length <= LINES_SCORED) return usable;
   const rest = usable.length - FIRST_LINES;
@@ -140,31 +141,6 @@ function firstDifference(
 
 function sameValue(a: ReturnType<typeof parseNumber>, b: ReturnType<typeof parseNumber>): boolean {
   return a === b || typeof a !== 'number' || typeof b !== 'number';
-}
-
-/**
- * Whether "0,00,2,51" is what this file holds: nothing but whole numbers
- * between commas, and either a piece such as "00" or "05", which is no whole
- * number anyone writes, or a first column that stands still while the piece
- * after it counts on.
- */
-function commasAreBoth(best: Candidate, sample: readonly string[]): boolean {
-  if (best.marks.decimal !== '.') return false;
-  const rows = best.dataLines.map((line) => best.cells[line]);
-  if (best.dataLines.some((line) => sample[line].includes('.') || sample[line].includes('"'))) return false;
-  if (rows.some((cells) => cells.slice(1).some((cell, at) => /^\s*0\d+\s*$/.test(cell) && /\d\s*$/.test(cells[at])))) {
-    return true;
-  }
-  const fourPieces = rows.filter((cells) => cells.length === 4 && cells.every((cell) => /^\s*-?\d+\s*$/.test(cell)));
-  if (fourPieces.length < rows.length || rows.length < 4) return false;
-  let ties = 0;
-  for (let index = 1; index < rows.length; index++) {
-    const before = Number(rows[index - 1][0]);
-    const now = Number(rows[index][0]);
-    if (now < before || (now === before && Number(rows[index][1]) <= Number(rows[index - 1][1]))) return false;
-    if (now === before) ties += 1;
-  }
-  return ties > 0 && rows.every((cells) => cells[1].trim().length === rows[0][1].trim().length);
 }
 
 /** Whether every row could as well be one number with a comma in it, and no header says that there are two columns. */

@@ -18,7 +18,7 @@ export interface HeaderFound {
 /** Text lines that may stand between a header and its rows, such as "Start of titration". */
 const TEXT_LINES_PASSED = 3;
 
-const OTHER_DELIMITERS: readonly RegExp[] = [/\t/, /;/, /\|/, / {2,}/, /,/, / +/];
+const OTHER_DELIMITERS: readonly RegExp[] = [/\t/, /;/, /\|/, / {2,}/, /,/];
 
 /**
  * Looks upwards from the first full row of a table, over the lines `above`
@@ -43,7 +43,7 @@ export function findHeader(
       partial.push(line);
       continue;
     }
-    if (unitsLine === undefined && isUnitsRow(facts.cells[line])) {
+    if (unitsLine === undefined && facts.widths[line] <= width && isUnitsRow(facts.cells[line])) {
       unitsLine = line;
       continue;
     }
@@ -89,11 +89,10 @@ function leadingRows(facts: LineFacts, above: readonly number[]): number[] {
 
 function isUnitsRow(cells: readonly string[]): boolean {
   const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
-  const units = filled.filter((cell) => readUnit(cell) !== undefined).length;
-  return (
-    units >= 1 &&
-    filled.every((cell) => readUnit(cell) !== undefined || isMissingMark(cell) || /^[[(]\W*1?[\])]$/.test(cell))
-  );
+  const units = filled.map(readUnit);
+  // "V" and "pH" alone are the names of columns.
+  if (!units.some((unit) => unit !== undefined && unit !== 'V' && unit !== 'pH')) return false;
+  return filled.every((cell, at) => units[at] !== undefined || isMissingMark(cell) || /^[[(]\W*1?[\])]$/.test(cell));
 }
 
 /** The cells of a line as column names, if it can be a header of `width` columns. */
@@ -106,19 +105,19 @@ function headerNames(
 ): readonly string[] | undefined {
   if (facts.kinds[line] === 'comment') {
     const bare = text.replace(/^\s*#+\s*/, '');
-    return splitOtherwise(bare, width);
+    return splitOtherwise(bare, width, true);
   }
   if (facts.numbers[line] > 0) return undefined;
   const cells = facts.cells[line].map((cell) => cell.trim());
   const filled = cells.filter((cell) => cell !== '').length;
-  if (delimiter === 'spaces') return splitOtherwise(text.trim(), width) ?? joinUnits(cells, width);
+  if (delimiter === 'spaces') return splitOtherwise(text.trim(), width, true) ?? joinUnits(cells, width);
   if (facts.texts[line] >= 2 && Math.abs(facts.widths[line] - width) <= 1 && filled >= width - 1) return cells;
-  return filled === 1 ? splitOtherwise(text.trim(), width) : undefined;
+  return filled === 1 ? splitOtherwise(text.trim(), width, false) : undefined;
 }
 
 /** Headers are now and then parted by another mark than the rows; only an exact fit counts, and figures never do. */
-function splitOtherwise(text: string, width: number): readonly string[] | undefined {
-  for (const delimiter of OTHER_DELIMITERS) {
+function splitOtherwise(text: string, width: number, atBlanks: boolean): readonly string[] | undefined {
+  for (const delimiter of atBlanks ? [...OTHER_DELIMITERS, / +/] : OTHER_DELIMITERS) {
     const cells = text.split(delimiter).map((cell) => cell.trim());
     if (cells.length !== width || width < 2) continue;
     if (cells.every((cell) => /\p{L}/u.test(cell) && !/^[-+\d]/.test(cell) && cell.length <= 40)) return cells;

@@ -74,7 +74,9 @@ function beginsAnew(
   pending: readonly number[],
   line: number,
 ): boolean {
-  const apart = pending.some((index) => facts.kinds[index] === 'blank' || facts.widths[index] === 1);
+  const apart = pending.some((index) => {
+    return index !== header.headerLine && (facts.kinds[index] === 'blank' || facts.widths[index] === 1);
+  });
   if (header.headerLine === undefined) return apart && !current.widths.has(facts.widths[line]);
   if (header.names.join('\n') === current.header.names.join('\n')) return true;
   // A row of words amid rows is a damaged row unless something sets it apart.

@@ -1,5 +1,6 @@
 import type { Dialect } from './dialect.ts';
 import { effectiveWidth } from './effectiveWidth.ts';
+import { longestRow } from './longestRow.ts';
 import { parseNumber } from './parseNumber.ts';
 
 /** What a line is by itself, before its neighbours are looked at. */
@@ -11,14 +12,15 @@ export interface LineFacts {
   readonly kinds: readonly LineKind[];
   /** Number of cells up to the last filled one. */
   readonly widths: Int32Array;
+  /** Values of all cells, line after line; NaN where a cell is no number. */
+  readonly values: Float64Array;
+  /** Where the values of a line begin; there are as many as its width. */
+  readonly valuesFrom: Int32Array;
   /** Number of cells that are numbers. */
   readonly numbers: Int32Array;
   /** Number of cells that are neither numbers nor marks for "no value". */
   readonly texts: Int32Array;
 }
-
-/** Longer lines are shown as text and not taken apart. */
-const LONGEST_ROW = 20_000;
 
 /** "# remark", but not the overflow mark "####" nor a spreadsheet's "#N/A". */
 const COMMENT = /^\s*#(?!#|N\/?A\b|NV\b|[A-Z]+(?:\/0)?[!?])/i;
@@ -34,8 +36,11 @@ export function lineFacts(
 ): LineFacts {
   const kinds: LineKind[] = new Array(lines.length);
   const widths = new Int32Array(lines.length);
+  const valuesFrom = new Int32Array(lines.length);
+  const values = new Float64Array(cells.reduce((sum, row) => sum + row.length, 0)).fill(Number.NaN);
   const numbers = new Int32Array(lines.length);
   const texts = new Int32Array(lines.length);
+  let next = 0;
   for (let index = 0; index < lines.length; index++) {
     const kind = kindOf(lines[index], cells[index]);
     kinds[index] = kind;
@@ -43,18 +48,23 @@ export function lineFacts(
     const row = cells[index];
     const width = effectiveWidth(row);
     widths[index] = width;
+    valuesFrom[index] = next;
     for (let column = 0; column < width; column++) {
       const value = parseNumber(row[column], dialect.marks);
-      if (typeof value === 'number') numbers[index] += 1;
-      else if (value === 'text') texts[index] += 1;
+      if (typeof value === 'number') {
+        values[next + column] = value;
+        numbers[index] += 1;
+      } else if (value === 'text') texts[index] += 1;
     }
+    next += width;
   }
-  return { cells, kinds, widths, numbers, texts };
+  return { cells, kinds, widths, values, valuesFrom, numbers, texts };
 }
 
 function kindOf(line: string, cells: readonly string[]): LineKind {
+  if (line.length > longestRow) return 'comment';
   if (effectiveWidth(cells) === 0) return 'blank';
-  if (line.length > LONGEST_ROW || COMMENT.test(line)) return 'comment';
+  if (COMMENT.test(line)) return 'comment';
   // Only a line that begins without a figure or letter can be a rule; this spares the rows the pattern.
   const first = line.charCodeAt(0);
   if ((first < 0x30 || first > 0x39) && RULE.test(line)) return 'rule';

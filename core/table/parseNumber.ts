@@ -7,6 +7,14 @@ export type CellValue = number | 'missing' | 'text';
 
 const ZERO = 0x30;
 const NINE = 0x39;
+const POINT = 0x2e;
+const COMMA = 0x2c;
+const PLUS = 0x2b;
+const MINUS = 0x2d;
+
+/** Integers of so many digits, and powers of ten up to 10^22, are exact in a double. */
+const EXACT_DIGITS = 15;
+const POWERS_OF_TEN = Float64Array.from({ length: EXACT_DIGITS + 1 }, (_, power) => 10 ** power);
 
 /**
  * Reads one cell strictly: the whole cell is one number in the given marks,
@@ -21,11 +29,37 @@ export function parseNumber(cell: string, marks: NumberMarks): CellValue {
   while (end > start && isBlank(cell.charCodeAt(end - 1))) end -= 1;
   if (start === end) return 'missing';
 
+  const plain = plainNumber(cell, start, end, marks.decimal === '.' ? POINT : COMMA);
+  if (!Number.isNaN(plain)) return plain;
   const numberEnd = scanNumber(cell, start, end, marks);
   if (numberEnd > start && (numberEnd === end || readUnit(cell.slice(numberEnd, end)) !== undefined)) {
     return toNumber(cell.slice(start, numberEnd), marks);
   }
   return isMissingMark(cell.slice(start, end)) ? 'missing' : 'text';
+}
+
+/**
+ * The fast way for what nearly every cell holds: a sign, a few digits, a decimal
+ * mark, a few digits. The quotient of two exact numbers is rounded once, so the
+ * value is the one that any correct reader gives. NaN for everything else.
+ */
+function plainNumber(cell: string, start: number, end: number, decimal: number): number {
+  const sign = cell.charCodeAt(start);
+  const first = sign === MINUS || sign === PLUS ? start + 1 : start;
+  if (end - first > EXACT_DIGITS + 1) return Number.NaN;
+  let mantissa = 0;
+  let mark = -1;
+  for (let at = first; at < end; at++) {
+    const code = cell.charCodeAt(at);
+    if (code >= ZERO && code <= NINE) mantissa = mantissa * 10 + code - ZERO;
+    else if (code === decimal && mark < 0) mark = at;
+    else return Number.NaN;
+  }
+  const decimals = mark < 0 ? 0 : end - mark - 1;
+  const digits = end - first - (mark < 0 ? 0 : 1);
+  if (digits === 0 || digits > EXACT_DIGITS || (mark >= 0 && decimals === 0 && decimal === COMMA)) return Number.NaN;
+  const value = mantissa / POWERS_OF_TEN[decimals];
+  return sign === MINUS ? 0 - value : value;
 }
 
 /** The end of the number that begins at `start`, or `start` where none does. */
@@ -59,17 +93,13 @@ function scanNumber(cell: string, start: number, end: number, marks: NumberMarks
 }
 
 function toNumber(text: string, marks: NumberMarks): CellValue {
-  let value = Number(text);
-  // Only the plainest spelling, a decimal point and no grouping, is what Number() expects.
-  if (marks.decimal !== '.' || Number.isNaN(value)) {
-    let plain = text.replace(/[‐‑‒–—−﹣-]/g, '-').replace('＋', '+');
-    if (marks.thousands === ' ') plain = plain.replace(/[ \u00a0\u2009\u202f]/g, '');
-    else if (marks.thousands === "'") plain = plain.replace(/['’]/g, '');
-    else if (marks.thousands !== '') plain = plain.replaceAll(marks.thousands, '');
-    value = Number(plain.replace(',', '.'));
-  }
+  let plain = text.replace(/[‐‑‒–—−﹣-]/g, '-').replace('＋', '+');
+  if (marks.thousands === ' ') plain = plain.replace(/[ \u00a0\u2009\u202f]/g, '');
+  else if (marks.thousands === "'") plain = plain.replace(/['’]/g, '');
+  else if (marks.thousands !== '') plain = plain.replaceAll(marks.thousands, '');
+  const value = Number(plain.replace(',', '.'));
   if (!Number.isFinite(value)) return 'text';
-  if (value === 0 && /^[^eE]*[1-9]/.test(text)) return 'text';
+  if (value === 0) return /^[^eE]*[1-9]/.test(text) ? 'text' : 0;
   return value;
 }
 

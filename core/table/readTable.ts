@@ -4,6 +4,7 @@ import { decodeText } from './decodeText.ts';
 import { chooseDialect } from './dialect.ts';
 import { findSections, type SectionFound } from './findSections.ts';
 import { type LineFacts, lineFacts } from './lineFacts.ts';
+import { longestRow } from './longestRow.ts';
 import { splitCells } from './splitCells.ts';
 import type { Table, TableSection, TextLine } from './table.ts';
 
@@ -26,7 +27,8 @@ export function readTable(bytes: Uint8Array, fileName: string): Outcome<Table> {
   const choice = chooseDialect(lines, fileName);
   if (!choice.ok) return choice;
   const { dialect, doubts } = choice.value;
-  const facts = lineFacts(lines, splitCells(lines, dialect.delimiter), dialect);
+  const short = lines.map((line) => (line.length > longestRow ? '' : line));
+  const facts = lineFacts(lines, splitCells(short, dialect.delimiter), dialect);
   const found = findSections(lines, facts, dialect.delimiter);
   if (found.length === 0) {
     const message = 'The file holds text with figures in it, but no rows of numbers.';
@@ -64,7 +66,18 @@ function toSection({ header, rows, width }: SectionFound, facts: LineFacts): Tab
     units: fill(header.units),
     captions: fill(header.captions),
     rows: rows.map((line) => ({ line: line + 1, cells: facts.cells[line] })),
+    values: columnValues(facts, rows, width),
   };
+}
+
+function columnValues(facts: LineFacts, rows: readonly number[], width: number): Float64Array[] {
+  const columns = Array.from({ length: width }, () => new Float64Array(rows.length).fill(Number.NaN));
+  rows.forEach((line, row) => {
+    const filled = Math.min(facts.widths[line], width);
+    const from = facts.valuesFrom[line];
+    for (let column = 0; column < filled; column++) columns[column][row] = facts.values[from + column];
+  });
+  return columns;
 }
 
 /** Every filled line that is neither a row nor part of a header. */

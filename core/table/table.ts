@@ -34,6 +34,8 @@ export interface TableSection {
   /** What stands above the header of each column, for tables side by side; '' where nothing does. */
   readonly captions: readonly string[];
   readonly rows: readonly TableRow[];
+  /** Per column the number in each row, NaN where the cell is none; to be looked up, never shown. */
+  readonly values: readonly Float64Array[];
 }
 
 /** A text file as it was understood: every line is blank, a text line, a header line or a data row. */
