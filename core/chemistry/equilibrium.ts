@@ -10,9 +10,9 @@ const roundingStep = 1e-5;
 const joinedIterations = 24;
 /** Largest change of ln[H⁺] in one Newton step; more than two pH units at once is a leap in the dark. */
 const largestStep = 5;
-/** Range of ln[H⁺] searched when Newton fails: p[H⁺] from −2 to 20. */
-const searchRange = { lowest: -20 * Math.LN10, highest: 2 * Math.LN10 } as const;
-/** 22 decades halved this often are below the spacing of doubles. */
+/** Range of ln[H⁺] searched when Newton fails: p[H⁺] from −1 to 16, all that water can show. */
+const searchRange = { lowest: -16 * Math.LN10, highest: Math.LN10 } as const;
+/** 17 decades halved this often are below the spacing of doubles. */
 const searchHalvings = 60;
 /** Smallest ionic strength handed to the root in the Davies function, mol/L. */
 const smallestIonicStrength = 1e-14;
@@ -61,7 +61,7 @@ export class Equilibrium {
   solve(composition: Float64Array, guessLogHydrogen: number, guessIonicStrength: number): boolean {
     const balance = this.balance;
     let x = guessLogHydrogen;
-    let ionic = guessIonicStrength > smallestIonicStrength ? guessIonicStrength : smallestIonicStrength;
+    let ionic = Math.max(guessIonicStrength, smallestIonicStrength);
     let previous = Number.POSITIVE_INFINITY;
     for (let iteration = 0; iteration < joinedIterations; iteration++) {
       balance.evaluate(composition, x, ionic);
@@ -82,7 +82,7 @@ export class Equilibrium {
       if (balance.davies) {
         const before = ionic;
         const next = ionic + (ionicMiss + balance.ionicByX * step) / determinant;
-        ionic = next > 0.1 * before ? next : 0.1 * before;
+        ionic = Math.max(next, 0.1 * before);
         size = Math.max(size, Math.abs(ionic - before) / ionic);
       } else ionic = balance.ionic;
       if (size < stepTolerance || (size < roundingStep && size >= previous)) {
