@@ -13,10 +13,12 @@ export default class SummaryReporter implements Reporter {
         counts[state === 'passed' || state === 'failed' ? state : 'skipped'] += 1;
       }
     }
-    const skipped = counts.skipped > 0 ? `, ${counts.skipped} skipped` : '';
     // At the very end of the process, behind whatever other reporters have to say.
-    process.once('exit', () => {
-      process.stdout.write(`tests: ${counts.passed} passed, ${counts.failed} failed${skipped}\n`);
+    process.once('exit', (status) => {
+      const skipped = counts.skipped > 0 ? `, ${counts.skipped} skipped` : '';
+      // A run can fail before its first test, as when the pages cannot be built.
+      const broken = status !== 0 && counts.failed === 0 ? ', the run itself failed' : '';
+      process.stdout.write(`tests: ${counts.passed} passed, ${counts.failed} failed${skipped}${broken}\n`);
     });
   }
 }
