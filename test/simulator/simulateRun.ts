@@ -1,6 +1,6 @@
 import { seededNoise } from './seededNoise.ts';
 import type { SimulatedMedium, SimulatedVessel } from './simulatedVessel.ts';
-import { simulatePoint, type SimulatedPoint } from './simulatePoint.ts';
+import { type SimulatedPoint, simulatePoint } from './simulatePoint.ts';
 
 /** What the instrument shows for a pX, the pH on its own scale. */
 export type SimulatedReading =
