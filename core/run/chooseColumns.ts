@@ -99,7 +99,8 @@ const NEARLY_ZERO = 0.02;
 function looksSwapped({ statistics, headers }: SectionColumns, { volume, reading }: ColumnPair): boolean {
   const named = statistics[reading];
   const other = statistics[volume];
-  if (headers[reading].role !== 'pH' || named.count < 5) return false;
+  if (headers[reading].role !== 'pH' || named.count < 5 || named.maximum === named.minimum) return false;
+  if (named.first > NEARLY_ZERO * named.maximum) return false;
   return (
     named.inPhRange < 0.5 && named.minimum >= 0 && named.rising >= 0.95 && other.inPhRange === 1 && other.rising >= 0.8
   );

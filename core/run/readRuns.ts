@@ -37,7 +37,7 @@ export function readRuns(bytes: Uint8Array, fileName: string): Outcome<readonly 
   if (!read.ok) return read;
   const table = read.value;
   const sections = table.sections.map((section): ReadSection => {
-    const columns = sectionColumns(section, table.dialect.marks);
+    const columns = sectionColumns(section, table.dialect);
     return { columns, choice: chooseColumns(columns, fileName) };
   });
   const main = mainSection(sections);

@@ -1,3 +1,4 @@
+import type { Dialect } from '../table/dialect.ts';
 import type { NumberMarks } from '../table/numberMarks.ts';
 import type { TableSection } from '../table/table.ts';
 import { type ColumnStatistics, columnStatistics } from './columnStatistics.ts';
@@ -12,11 +13,19 @@ export interface SectionColumns {
 }
 
 /** Looks at the figures and the header of every column. */
-export function sectionColumns(section: TableSection, marks: NumberMarks): SectionColumns {
+export function sectionColumns(section: TableSection, { delimiter, marks }: Dialect): SectionColumns {
+  const headers = section.names.map((name, column) => roleFromHeader(name, section.units[column]));
+  // Parted at blanks, a title such as "pH titration" looks like a header; a real one names both columns.
+  const isTitle = delimiter === 'spaces' && !namesBoth(headers);
   return {
     section,
     marks,
     statistics: section.values.map(columnStatistics),
-    headers: section.names.map((name, column) => roleFromHeader(name, section.units[column])),
+    headers: isTitle ? headers.map(() => ({})) : headers,
   };
+}
+
+function namesBoth(headers: readonly HeaderReading[]): boolean {
+  const names = (...roles: readonly HeaderReading['role'][]) => headers.some(({ role }) => roles.includes(role));
+  return names('volume') && names('pH', 'mV', 'reading');
 }

@@ -46,7 +46,7 @@ const DELIMITERS: readonly Delimiter[] = ['\t', ';', '|', ',', 'spaces'];
 export function chooseDialect(lines: readonly string[], fileName: string): Outcome<DialectChoice> {
   const numbered = selectLines(lines);
   const sample = numbered.map((index) => lines[index]);
-  const candidates = candidatesFor(sample).sort((a, b) => b.score - a.score);
+  const candidates = candidatesFor(sample).sort((a, b) => b.score - a.score || assumes(a) - assumes(b));
   const best = candidates[0];
   if (best === undefined || best.score <= 0) return { ok: false, refusals: [noColumns(lines, fileName)] };
   const firstLine = numbered[best.dataLines[0]] + 1;
@@ -68,6 +68,11 @@ export function chooseDialect(lines: readonly string[], fileName: string): Outco
   else if (couldBeOneColumn(best, sample, lines.slice(0, firstLine - 1)))
     doubts.push(oneColumnDoubt(lines[firstLine - 1], firstLine, fileName));
   return { ok: true, value: { dialect, doubts } };
+}
+
+/** Of two readings that are equally good, the one without a thousands mark assumes less. */
+function assumes({ marks }: Candidate): number {
+  return marks.thousands === '' ? 0 : 1;
 }
 
 function selectLines(lines: readonly string[]): number[] {
@@ -93,8 +98,10 @@ function candidatesFor(sample: readonly string[]): Candidate[] {
     const cells = splitCells(sample, delimiter);
     for (const decimal of ['.', ','] as const) {
       // A comma between unquoted figures cannot both part cells and stand before decimals.
-      if (decimal === ',' && (!text.includes(',') || (delimiter === ',' && !quoted))) continue;
+      if (decimal === ',' && delimiter === ',' && !quoted) continue;
       for (const thousands of thousandsFor(text, delimiter, decimal)) {
+        // Without any comma there is nothing to try but points that part thousands.
+        if (decimal === ',' && thousands !== '.' && !text.includes(',')) continue;
         const marks: NumberMarks = { decimal, thousands };
         candidates.push({ delimiter, marks, cells, ...scoreMarks(cells, marks) });
       }
