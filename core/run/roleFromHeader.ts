@@ -46,6 +46,8 @@ export function roleFromHeader(header: string, unitsRow: string): HeaderReading 
   const { base, unit: unitInName } = splitUnit(header);
   const unit = readUnit(unitsRow) ?? unitInName;
   const role = roleOf(name, plain(base), unit);
+  // Units of derivatives and drifts are not followed up.
+  if (role === 'derivative') return { role };
   return { ...(role === undefined ? {} : { role }), ...(unit === undefined ? {} : { unit }) };
 }
 

@@ -2,6 +2,7 @@ import type { Outcome } from '../notice/outcome.ts';
 import type { Refusal } from '../notice/refusal.ts';
 import { decodeText } from './decodeText.ts';
 import { chooseDialect } from './dialect.ts';
+import type { HeaderFound } from './findHeader.ts';
 import { findSections, type SectionFound } from './findSections.ts';
 import { type LineFacts, lineFacts } from './lineFacts.ts';
 import { longestRow } from './longestRow.ts';
@@ -62,12 +63,17 @@ function toSection({ header, rows, width }: SectionFound, facts: LineFacts): Tab
   return {
     width,
     ...(header.headerLine === undefined ? {} : { headerLine: header.headerLine + 1 }),
+    headerLines: headerLinesOf(header).map((line) => line + 1),
     names: fill(header.names),
     units: fill(header.units),
     captions: fill(header.captions),
     rows: rows.map((line) => ({ line: line + 1, cells: facts.cells[line] })),
     values: columnValues(facts, rows, width),
   };
+}
+
+function headerLinesOf({ captionsLine, headerLine, unitsLine }: HeaderFound): number[] {
+  return [captionsLine, headerLine, unitsLine].filter((line) => line !== undefined);
 }
 
 function columnValues(facts: LineFacts, rows: readonly number[], width: number): Float64Array[] {
@@ -84,9 +90,7 @@ function columnValues(facts: LineFacts, rows: readonly number[], width: number):
 function textLines(lines: readonly string[], facts: LineFacts, sections: readonly SectionFound[]): TextLine[] {
   const taken = new Uint8Array(lines.length);
   for (const { header, rows } of sections) {
-    for (const line of [header.headerLine, header.unitsLine, header.captionsLine]) {
-      if (line !== undefined) taken[line] = 1;
-    }
+    for (const line of headerLinesOf(header)) taken[line] = 1;
     for (const line of rows) taken[line] = 1;
   }
   const text: TextLine[] = [];

@@ -27,6 +27,8 @@ export interface TableSection {
   readonly width: number;
   /** Line of the header; undefined where the table has none. */
   readonly headerLine?: number;
+  /** All lines taken up by captions, header and units row, in order. */
+  readonly headerLines: readonly number[];
   /** Header of each column, '' where there is none. */
   readonly names: readonly string[];
   /** Unit of each column from a row under the header, as written; '' where there is none. */

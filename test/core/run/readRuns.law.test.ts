@@ -3,6 +3,7 @@ import { fileURLToPath } from 'node:url';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { readRuns } from '../../../core/run/readRuns.ts';
+import { decodeText } from '../../../core/table/decodeText.ts';
 import { readTable } from '../../../core/table/readTable.ts';
 import { arbitraryExport } from './arbitraryExport.ts';
 
@@ -113,14 +114,20 @@ describe('the law of accounting', () => {
       fc.property(anyFile, (bytes) => {
         const table = readTable(bytes, 'any.csv');
         if (!table.ok) return;
-        const { sections, preamble, remarks, lineCount } = table.value;
+        const { sections, preamble, remarks } = table.value;
         const lines = [
-          ...sections.flatMap(({ rows }) => rows.map(({ line }) => line)),
+          ...sections.flatMap(({ rows, headerLines }) => [...rows.map(({ line }) => line), ...headerLines]),
           ...preamble.map(({ line }) => line),
           ...remarks.map(({ line }) => line),
         ];
         expect(new Set(lines).size).toBe(lines.length);
-        for (const line of lines) expect(line).toBeLessThanOrEqual(lineCount);
+        const decoded = decodeText(bytes);
+        // A quoted cell may rightly swallow the end of a line and the next one.
+        if (!decoded.ok || decoded.value.text.includes('"')) return;
+        const accounted = new Set(lines);
+        decoded.value.text.split('\n').forEach((line, index) => {
+          if (/[\p{L}\d]/u.test(line)) expect(accounted.has(index + 1), `line ${index + 1}: ${line}`).toBe(true);
+        });
       }),
       { seed: 4712, numRuns: 500 },
     );
