@@ -38,8 +38,7 @@ export function decodeText(bytes: Uint8Array): Outcome<DecodedText> {
       'Export the titration alone, or a part of it, to a file of its own.',
     );
   }
-  const encoding = encodingOf(bytes);
-  const raw = decodeAs(bytes, encoding);
+  const { encoding, raw } = decodeByEvidence(bytes);
   // The decoder drops a byte order mark itself; files glued together carry further ones inside.
   const text = normaliseLineEnds(raw.includes('\ufeff') ? raw.replaceAll('\ufeff', '') : raw);
   if (!/\S/.test(text)) {
@@ -60,7 +59,19 @@ function refuse(code: RefusalCode, message: string, remedy: string): Outcome<nev
   return { ok: false, refusals: [{ code, message, remedy, place: {} }] };
 }
 
-function encodingOf(bytes: Uint8Array): TextEncodingName {
+function decodeByEvidence(bytes: Uint8Array): { readonly encoding: TextEncodingName; readonly raw: string } {
+  const wide = utf16Of(bytes);
+  if (wide !== undefined) return { encoding: wide, raw: new TextDecoder(wide.toLowerCase()).decode(bytes) };
+  const raw = asUtf8(bytes);
+  if (raw !== undefined) return { encoding: 'UTF-8', raw };
+  const latin = new TextDecoder('windows-1252').decode(bytes);
+  return {
+    encoding: 'Windows-1252',
+    raw: latin.replace(/[\u0080-\u009f]/g, (character) => WINDOWS_1252_C1[character.charCodeAt(0) - 0x80]),
+  };
+}
+
+function utf16Of(bytes: Uint8Array): 'UTF-16LE' | 'UTF-16BE' | undefined {
   if (bytes[0] === 0xff && bytes[1] === 0xfe) return 'UTF-16LE';
   if (bytes[0] === 0xfe && bytes[1] === 0xff) return 'UTF-16BE';
   const looked = Math.min(bytes.length, PATTERN_BYTES) & ~1;
@@ -75,22 +86,15 @@ function encodingOf(bytes: Uint8Array): TextEncodingName {
   const hardly = looked / 2 / 50;
   if (oddNuls > mostly && evenNuls <= hardly) return 'UTF-16LE';
   if (evenNuls > mostly && oddNuls <= hardly) return 'UTF-16BE';
-  return isUtf8(bytes) ? 'UTF-8' : 'Windows-1252';
+  return undefined;
 }
 
-function isUtf8(bytes: Uint8Array): boolean {
+function asUtf8(bytes: Uint8Array): string | undefined {
   try {
-    new TextDecoder('utf-8', { fatal: true }).decode(bytes);
-    return true;
+    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
   } catch {
-    return false;
+    return undefined;
   }
-}
-
-function decodeAs(bytes: Uint8Array, encoding: TextEncodingName): string {
-  const text = new TextDecoder(encoding.toLowerCase()).decode(bytes);
-  if (encoding !== 'Windows-1252') return text;
-  return text.replace(/[\u0080-\u009f]/g, (character) => WINDOWS_1252_C1[character.charCodeAt(0) - 0x80]);
 }
 
 function normaliseLineEnds(text: string): string {

@@ -63,10 +63,11 @@ export function lineFacts(
 
 function kindOf(line: string, cells: readonly string[]): LineKind {
   if (line.length > longestRow) return 'comment';
+  // Nearly every line is a row and begins with a figure; none of the patterns below does.
+  const first = line.charCodeAt(0);
+  if (first >= 0x30 && first <= 0x39 && cells.length > 0) return 'cells';
   if (effectiveWidth(cells) === 0) return 'blank';
   if (COMMENT.test(line)) return 'comment';
-  // Only a line that begins without a figure or letter can be a rule; this spares the rows the pattern.
-  const first = line.charCodeAt(0);
-  if ((first < 0x30 || first > 0x39) && RULE.test(line)) return 'rule';
+  if (RULE.test(line)) return 'rule';
   return 'cells';
 }
