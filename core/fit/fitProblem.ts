@@ -1,0 +1,170 @@
+import type { Problem } from '../model/problem.ts';
+import { type CovarianceEstimate, covarianceOf, estimateCovariance } from './covariance.ts';
+import { dataSlopes } from './dataSlopes.ts';
+import { estimateReadingNoise } from './estimateReadingNoise.ts';
+import { solveLeastSquares } from './leastSquares.ts';
+import { type EndingCode, endings } from './leastSquaresEnding.ts';
+import { declaredNoise, type Noise, type NoiseDeclaration, noiseAt, writeSigma } from './noise.ts';
+import { readingResolution } from './readingResolution.ts';
+import { WeightedProblem } from './weightedProblem.ts';
+
+/** Reading noise assumed for the first weights, in pH; the readings correct it at once. */
+const firstReadingNoise = 0.02;
+/** Rounds of weighing and fitting; the weights change the answer little, so that a few suffice. */
+const mostRounds = 15;
+/** The solution stands still when parameters move by less than this part of their uncertainty. */
+const standstill = 1e-4;
+/** The same for the noise, relative. */
+const noiseStandstill = 1e-4;
+/** Cost tolerance while the weights still change; what it leaves over the next round takes up. */
+const roughCostTolerance = 1e-5;
+/** Change of the whitened residuals, in standard uncertainties, that no longer matters. */
+const residualResolution = 1e-6;
+/** No constant moves by more than this in one step, in pH, lest it lands where the run says nothing. */
+const constantStepLimit = 2;
+/** No declared knowledge moves by more than this in one step, in standard uncertainties. */
+const knowledgeStepLimit = 4;
+
+/** Noise of one run as it stands in the fit. */
+export interface RunNoise extends Noise {
+  readonly declared: boolean;
+  /** Points minus what the data determined; not always a whole number. */
+  readonly degreesOfFreedom: number;
+  /** Weighted sum of squares over degrees of freedom; null where none is left. */
+  readonly reducedChiSquare: number | null;
+}
+
+export interface ProblemFit {
+  readonly ending: EndingCode;
+  readonly parameters: Float64Array;
+  /** Σ of squared whitened residuals, knowledge included; null where the curve could not be computed. */
+  readonly cost: number | null;
+  /** At the solution: curves, slopes and sigma of every run. */
+  readonly weighted: WeightedProblem;
+  readonly residuals: Float64Array;
+  readonly jacobian: Float64Array;
+  readonly covariance: CovarianceEstimate;
+  readonly noise: readonly RunNoise[];
+}
+
+/**
+ * Fits a problem from one start. The weight of a volume error follows the
+ * slope of the curve, and undeclared noise follows the residuals, so that
+ * weighing and fitting alternate until the solution stands still; the last
+ * weights are then frozen.
+ *
+ * @param start one number per parameter of the problem
+ */
+export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
+  const weighted = new WeightedProblem(problem);
+  const declarations = weighted.runs.map(({ run }) => declaredNoise(run.sheet, run.design.nernstSlope_mV));
+  const unitsPerPH = weighted.runs.map(({ run }) => (run.design.readingKind === 'mV' ? run.design.nernstSlope_mV : 1));
+  const smallest = weighted.runs.map(({ run }) => readingResolution(run.readings) / Math.sqrt(12));
+  const stepLimits = stepLimitsOf(problem);
+  let readings = declarations.map((declaration, r) =>
+    declaration.kind === 'declared' ? declaration.reading : firstReadingNoise * unitsPerPH[r],
+  );
+  weighted.runs.forEach(({ run, sigma }, r) => {
+    writeSigma(noiseAt(declarations[r], readings[r]), dataSlopes(run.volumes, run.readings), sigma);
+  });
+
+  let parameters = start;
+  for (let round = 0; ; round++) {
+    const rough = round === 0;
+    const result = solveLeastSquares(weighted, parameters, {
+      stepLimits,
+      residualResolution,
+      ...(rough ? { costTolerance: roughCostTolerance, iterationLimit: 60 } : { iterationLimit: 200 }),
+    });
+    const usable = endings[result.ending].usable || (rough && result.ending === 'iteration-limit');
+    const covariance = estimateCovariance(result.jacobian, weighted.residualCount, weighted.parameterCount);
+    const moved = largestMove(parameters, result.parameters, covariance);
+    parameters = result.parameters;
+    const freedom = weighted.runs.map((_, r) => degreesOfFreedom(weighted, r, result.jacobian, covariance));
+
+    const finish = (): ProblemFit => {
+      // Curves and values belong to the point asked last, which need not be the solution.
+      weighted.residuals(parameters, result.residuals);
+      const noise = weighted.runs.map((_, r) =>
+        describeNoise(weighted, r, declarations[r], readings[r], freedom[r], result.residuals),
+      );
+      const { ending, cost, residuals, jacobian } = result;
+      return { ending, parameters, cost, weighted, residuals, jacobian, covariance, noise };
+    };
+    if (!usable || round === mostRounds) return finish();
+
+    const next = readings.map((reading, r) => {
+      if (!(freedom[r] > 0)) return reading;
+      const { sigma, slopes, firstResidual } = weighted.runs[r];
+      const misses = sigma.map((s, i) => s * result.residuals[firstResidual + i]);
+      return estimateReadingNoise(declarations[r], misses, slopes, freedom[r], smallest[r]);
+    });
+    const noiseMoved = next.some((reading, r) => Math.abs(reading / readings[r] - 1) > noiseStandstill);
+    if (!rough && moved < standstill && !noiseMoved) return finish();
+    readings = next;
+    weighted.runs.forEach(({ slopes, sigma }, r) => {
+      writeSigma(noiseAt(declarations[r], readings[r]), slopes, sigma);
+    });
+  }
+}
+
+/** Points of a run minus the directions that they determined: the sum of 1 − leverage over its readings. */
+function degreesOfFreedom(
+  weighted: WeightedProblem,
+  run: number,
+  jacobian: Float64Array,
+  { covariance }: CovarianceEstimate,
+): number {
+  const { firstResidual, sigma } = weighted.runs[run];
+  const { parameterCount, residualCount } = weighted;
+  let determined = 0;
+  for (let a = 0; a < parameterCount; a++)
+    for (let b = 0; b <= a; b++) {
+      let product = 0;
+      for (let i = firstResidual; i < firstResidual + sigma.length; i++)
+        product += jacobian[a * residualCount + i] * jacobian[b * residualCount + i];
+      determined += (a === b ? 1 : 2) * product * covariance[a * parameterCount + b];
+    }
+  return sigma.length - determined;
+}
+
+function describeNoise(
+  weighted: WeightedProblem,
+  run: number,
+  declaration: NoiseDeclaration,
+  reading: number,
+  freedom: number,
+  residuals: Float64Array,
+): RunNoise {
+  const { firstResidual, sigma } = weighted.runs[run];
+  let sum = 0;
+  for (let i = firstResidual; i < firstResidual + sigma.length; i++) sum += residuals[i] ** 2;
+  return {
+    ...noiseAt(declaration, reading),
+    declared: declaration.kind === 'declared',
+    degreesOfFreedom: freedom,
+    reducedChiSquare: freedom > 0 ? sum / freedom : null,
+  };
+}
+
+/** Largest change of a determined parameter in units of its uncertainty. */
+function largestMove(from: Float64Array, to: Float64Array, estimate: CovarianceEstimate): number {
+  let largest = 0;
+  for (let j = 0; j < from.length; j++) {
+    const variance = covarianceOf(estimate, j, j);
+    if (variance !== null && variance > 0) largest = Math.max(largest, Math.abs(to[j] - from[j]) / Math.sqrt(variance));
+  }
+  return largest;
+}
+
+function stepLimitsOf(problem: Problem): Float64Array {
+  const limits = Float64Array.from(problem.parameters, ({ kind }) =>
+    kind === 'knowledge' ? knowledgeStepLimit : Number.POSITIVE_INFINITY,
+  );
+  for (const { design, bindings } of problem.runs)
+    design.quantities.forEach(({ role }, q) => {
+      const binding = bindings[q];
+      if (role.kind === 'acidity' && binding.kind === 'parameter') limits[binding.parameter] = constantStepLimit;
+    });
+  return limits;
+}

@@ -1,0 +1,132 @@
+import { bindingTerms, boundValue } from '../model/binding.ts';
+import type { Problem, ProblemRun } from '../model/problem.ts';
+import { RunModel } from '../model/runModel.ts';
+import type { LeastSquaresProblem } from './leastSquaresProblem.ts';
+
+/** One run inside a weighted problem; arrays have one entry per point unless said otherwise. */
+export interface WeightedRun {
+  readonly run: ProblemRun;
+  readonly model: RunModel;
+  /** Position of its first residual. */
+  readonly firstResidual: number;
+  /** Values of all quantities at the parameters evaluated last. */
+  readonly values: Float64Array;
+  /** Predicted readings there. */
+  readonly predicted: Float64Array;
+  /** d reading / d burette volume at the last derivatives, unit/mL. */
+  readonly slopes: Float64Array;
+  /** Standard uncertainty of each residual, in the unit of the reading; set by whoever weighs the points. */
+  readonly sigma: Float64Array;
+}
+
+/**
+ * A problem as the engine sees it: readings of all runs whitened by `sigma`,
+ * then one residual of weight one for every δ of declared knowledge.
+ */
+export class WeightedProblem implements LeastSquaresProblem {
+  readonly problem: Problem;
+  readonly runs: readonly WeightedRun[];
+  readonly parameterCount: number;
+  readonly residualCount: number;
+  /** Number of residuals that come from readings; those of knowledge follow. */
+  readonly readingCount: number;
+
+  /** How often curves and derivatives were computed from the model, for the benchmark. */
+  curveEvaluations = 0;
+  derivativeEvaluations = 0;
+
+  private readonly knowledge: readonly number[];
+  /** Parameters of the last derivatives; curve and derivatives there are kept, since new weights only rescale them. */
+  private readonly keptParameters: Float64Array;
+  private readonly keptCurves: readonly Float64Array[];
+  /** Per run: quantities that move, with the parameters that move them. */
+  private readonly moving: readonly {
+    readonly wanted: Int32Array;
+    readonly terms: readonly (readonly { readonly parameter: number; readonly sensitivity: number }[])[];
+    readonly derivatives: Float64Array;
+  }[];
+
+  constructor(problem: Problem) {
+    this.problem = problem;
+    this.parameterCount = problem.parameters.length;
+    this.knowledge = problem.parameters.flatMap((parameter, index) => (parameter.kind === 'knowledge' ? [index] : []));
+    let firstResidual = 0;
+    this.runs = problem.runs.map((run) => {
+      const count = run.volumes.length;
+      const weighted: WeightedRun = {
+        run,
+        model: new RunModel(run.design, run.volumes, run.readings),
+        firstResidual,
+        values: new Float64Array(run.design.quantities.length),
+        predicted: new Float64Array(count),
+        slopes: new Float64Array(count),
+        sigma: new Float64Array(count).fill(1),
+      };
+      firstResidual += count;
+      return weighted;
+    });
+    this.readingCount = firstResidual;
+    this.residualCount = firstResidual + this.knowledge.length;
+    this.keptParameters = new Float64Array(this.parameterCount).fill(Number.NaN);
+    this.keptCurves = this.runs.map(({ predicted }) => new Float64Array(predicted.length));
+    this.moving = this.runs.map(({ run }) => {
+      const terms = run.bindings.map(bindingTerms);
+      const wanted = Int32Array.from(terms.flatMap((list, quantity) => (list.length > 0 ? [quantity] : [])));
+      return {
+        wanted,
+        terms: Array.from(wanted, (quantity) => terms[quantity]),
+        derivatives: new Float64Array(wanted.length * run.volumes.length),
+      };
+    });
+  }
+
+  residuals(parameters: Float64Array, residuals: Float64Array): boolean {
+    const kept = this.isKept(parameters);
+    if (!kept) this.curveEvaluations++;
+    for (let r = 0; r < this.runs.length; r++) {
+      const { run, model, values, predicted, sigma, firstResidual } = this.runs[r];
+      for (let q = 0; q < values.length; q++) values[q] = boundValue(run.bindings[q], parameters);
+      if (kept) predicted.set(this.keptCurves[r]);
+      else if (!model.predict(values, predicted)) return false;
+      for (let i = 0; i < predicted.length; i++)
+        residuals[firstResidual + i] = (predicted[i] - run.readings[i]) / sigma[i];
+    }
+    this.knowledge.forEach((parameter, k) => {
+      residuals[this.readingCount + k] = parameters[parameter];
+    });
+    return true;
+  }
+
+  /** Called directly after `residuals` at the same parameters. */
+  derivatives(parameters: Float64Array, jacobian: Float64Array): boolean {
+    const kept = this.isKept(parameters);
+    if (!kept) this.derivativeEvaluations++;
+    jacobian.fill(0);
+    this.runs.forEach((weighted, r) => {
+      const { model, predicted, slopes, sigma, firstResidual } = weighted;
+      const { wanted, terms, derivatives } = this.moving[r];
+      const count = sigma.length;
+      if (!kept) {
+        model.differentiate(wanted, derivatives, slopes);
+        this.keptCurves[r].set(predicted);
+      }
+      for (let j = 0; j < wanted.length; j++) {
+        for (const { parameter, sensitivity } of terms[j]) {
+          const column = parameter * this.residualCount + firstResidual;
+          for (let i = 0; i < count; i++) jacobian[column + i] += (sensitivity * derivatives[j * count + i]) / sigma[i];
+        }
+      }
+    });
+    this.knowledge.forEach((parameter, k) => {
+      jacobian[parameter * this.residualCount + this.readingCount + k] = 1;
+    });
+    this.keptParameters.set(parameters);
+    return true;
+  }
+
+  private isKept(parameters: Float64Array): boolean {
+    for (let j = 0; j < parameters.length; j++) if (parameters[j] !== this.keptParameters[j]) return false;
+    // A problem without parameters has one point only, but it must be computed once.
+    return parameters.length > 0;
+  }
+}
