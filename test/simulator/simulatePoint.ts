@@ -106,7 +106,6 @@ function ionicStrengthOf(mixture: Mixture, solved: Solved): number {
       sum += (system.chargeFullyProtonated - lost) ** 2 * concentration;
     });
   });
-  // A setting error can make the first volume minutely negative.
   return Math.max(0, sum / 2);
 }
 
@@ -140,7 +139,8 @@ function solveAt(mixture: Mixture, pKw: number, davies: number): Solved {
  */
 export function simulatePoint({ sample, titrant, extraWater_mL, volume_mL, medium }: SimulatedMixing): SimulatedPoint {
   const mixture = mix(sample, titrant, extraWater_mL, volume_mL);
-  let ionicStrength = (mixture.cations_M + mixture.anions_M) / 2;
+  // A setting error can make the first volume, and with it the ions of the titrant, minutely negative.
+  let ionicStrength = Math.max(0, (mixture.cations_M + mixture.anions_M) / 2);
   let solved = solveAt(mixture, medium.pKw, daviesTerm(medium, ionicStrength));
   let lastChange = Number.POSITIVE_INFINITY;
   let damping = 1;
