@@ -1,6 +1,14 @@
 import { simulatePoint } from '../test/simulator/simulatePoint.ts';
 import type { SimulatedRunInput } from '../test/simulator/simulateRun.ts';
-import type { Dosing } from './sampleRun.ts';
+
+/** How the titrator chose its doses; volumes in mL. */
+export interface Dosing {
+  readonly last_mL: number;
+  readonly smallest_mL: number;
+  readonly largest_mL: number;
+  /** Change of pH that a dose aims at. */
+  readonly aim_pH: number;
+}
 
 /**
  * Volumes of a dynamic titration, mL: each dose aims at an equal change of pH,

@@ -1,5 +1,5 @@
 import { type SimulatedRun, type SimulatedRunInput, simulateRun } from '../test/simulator/simulateRun.ts';
-import { doseVolumes } from './doseVolumes.ts';
+import { type Dosing, doseVolumes } from './doseVolumes.ts';
 
 /** One invented run: the text of its export, its sheet and its truth. */
 export interface SampleRun {
@@ -8,15 +8,6 @@ export interface SampleRun {
   readonly sheet: Readonly<Record<string, unknown>>;
   /** Values of everything known or fitted, by the id of the quantity. */
   readonly truth: Readonly<Record<string, number>>;
-}
-
-/** How the titrator chose its doses; volumes in mL. */
-export interface Dosing {
-  readonly last_mL: number;
-  readonly smallest_mL: number;
-  readonly largest_mL: number;
-  /** Change of pH that a dose aims at. */
-  readonly aim_pH: number;
 }
 
 /** Water at 25 °C, molar scale: Debye–Hückel A, pKw and the constants of carbonic acid at infinite dilution. */
