@@ -1,0 +1,37 @@
+import type { Declaration, QuantityFile } from '../../../core/index.ts';
+import { formatDeclared } from '../../widgets/formatQuantity.ts';
+
+/** A declared quantity in the words of a method section: "0.1002 M, u = 0.0002 M". */
+export function declarationWords(
+  declaration: Declaration,
+  written: QuantityFile | undefined,
+  words: { readonly unit: string; readonly decimals: number; readonly whenZero?: string; readonly behind?: string },
+): string {
+  const behind = words.behind === undefined ? '' : ` ${words.behind}`;
+  if (declaration.state === 'fitted') {
+    const start = declaration.start === null ? '' : `, starting at ${withUnit(declaration.start, 0, words.unit)}`;
+    return `to be fitted${start}`;
+  }
+  if (declaration.state === 'fixed') {
+    if (declaration.value === 0 && words.whenZero !== undefined) return words.whenZero;
+    return `${withUnit(declaration.value, words.decimals, words.unit)}${behind}`;
+  }
+  const value = `${withUnit(declaration.value, words.decimals, words.unit)}${behind}`;
+  return `${value}, ${uncertaintyWords(declaration, written, words.unit)}`;
+}
+
+function uncertaintyWords(
+  declaration: Extract<Declaration, { state: 'known' }>,
+  written: QuantityFile | undefined,
+  unit: string,
+): string {
+  if (typeof written === 'object' && 'U' in written) return `U = ${withUnit(written.U, 0, unit)} (k = ${written.k})`;
+  if (typeof written === 'object' && 'tolerance' in written)
+    return `tolerance ±${withUnit(written.tolerance, 0, unit)} (${written.distribution})`;
+  return `u = ${withUnit(declaration.u, 0, unit)}`;
+}
+
+function withUnit(value: number, decimals: number, unit: string): string {
+  // A no-break space keeps number and unit on one line.
+  return `${formatDeclared(value, decimals)}${unit === '' ? '' : `\u00a0${unit}`}`;
+}
