@@ -3,6 +3,7 @@ export type { Doubt, DoubtCode } from './notice/doubt.ts';
 export type { Outcome } from './notice/outcome.ts';
 export type { Place } from './notice/place.ts';
 export type { Refusal, RefusalCode } from './notice/refusal.ts';
+export { analyseRun } from './results/analyseRun.ts';
 export type { Progress } from './results/progress.ts';
 export type * from './results/runResult.ts';
 export { readRuns } from './run/readRuns.ts';

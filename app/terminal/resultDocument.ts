@@ -1,0 +1,73 @@
+import type { Doubt, Refusal, RunResult } from '../../core/index.ts';
+import { software } from './software.ts';
+
+/** Seed of everything random; nothing that is printed by this command draws numbers yet, and it is stated all the same. */
+const seed = 1;
+
+/** The JSON document of a call: format "stepwell-result", version 1. Keys may be added; none changes its meaning. */
+export function resultDocument(results: readonly RunResult[], refusals: readonly Refusal[]) {
+  return {
+    format: 'stepwell-result',
+    version: 1,
+    software,
+    seed,
+    runs: results.map(describeRun),
+    refusals: [
+      ...refusals.map(describeRefusal),
+      ...results.flatMap(({ run }) =>
+        run.notAccepted.map((refusal) => describeRefusal({ ...refusal, place: { file: run.file, ...refusal.place } })),
+      ),
+    ],
+  };
+}
+
+function describeRun(result: RunResult) {
+  const { run, ending, quantities, equivalence, noise, doubts, points, ladder, correlation } = result;
+  return {
+    file: run.file,
+    name: run.name,
+    points: points.filter((point) => point.used).length,
+    ending,
+    quantities: quantities.map(({ id, label, unit, state, value, u, interval95, whyNoU, restsOn, constant }) => ({
+      id,
+      label,
+      unit,
+      state,
+      value,
+      u,
+      interval95,
+      whyNoU,
+      restsOn,
+      constant,
+    })),
+    equivalence,
+    noise: noise ?? {
+      reading: null,
+      setting_mL: null,
+      dose_mL: null,
+      unit: run.readingKind,
+      declared: false,
+      reducedChiSquare: null,
+      degreesOfFreedom: null,
+    },
+    doubts: doubts.map(describeDoubt),
+    ladder,
+    correlation,
+  };
+}
+
+function describeDoubt({ code, seen, means, remedy, place }: Doubt) {
+  return { code, message: `${seen} ${means}`, remedy, place };
+}
+
+function describeRefusal({ code, message, remedy, place }: Refusal) {
+  return {
+    code,
+    file: place.file ?? null,
+    line: place.line ?? null,
+    column: place.column ?? null,
+    key: place.key ?? null,
+    message,
+    remedy,
+  };
+}

@@ -1,0 +1,27 @@
+import type { DerivativeEndpoint } from '../endpoints/derivativeEndpoints.ts';
+import type { ProblemFit } from '../fit/fitProblem.ts';
+import type { WeightedRun } from '../fit/weightedProblem.ts';
+import type { Run } from '../run/run.ts';
+import type { Sheet } from '../sheet/sheet.ts';
+import type { Speciation } from '../speciation/speciation.ts';
+import type { EquivalenceResult, PointResult, QuantityResult } from './runResult.ts';
+
+/** A fitted run with everything the results and the checks are drawn from. */
+export interface Analysis {
+  readonly run: Run;
+  readonly sheet: Sheet;
+  readonly fit: ProblemFit;
+  /** Position of the run in the problem of the fit. */
+  readonly index: number;
+  /** The run inside the fit: its model, curve and weights. */
+  readonly weighted: WeightedRun;
+  /** Different minima in which the automatic starts ended. */
+  readonly minima: number;
+  readonly speciation: Speciation;
+  /** Steps of the readings and of the fitted curve at the same volumes. */
+  readonly readSteps: readonly DerivativeEndpoint[];
+  readonly curveSteps: readonly DerivativeEndpoint[];
+  readonly quantities: readonly QuantityResult[];
+  readonly equivalence: readonly EquivalenceResult[];
+  readonly points: readonly PointResult[];
+}

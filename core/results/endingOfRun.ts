@@ -1,0 +1,61 @@
+import type { ShapeOfRun } from '../endpoints/shapeOfRun.ts';
+import type { FitFromScratch } from '../fit/fitFromScratch.ts';
+import { type EndingCode, endings } from '../fit/leastSquaresEnding.ts';
+import { buildProblem } from '../model/problem.ts';
+import type { Run } from '../run/run.ts';
+import type { Sheet } from '../sheet/sheet.ts';
+import type { RunEnding, RunEndingCode } from './runResult.ts';
+import type { UsedPoints } from './usedPoints.ts';
+
+/** Fewer points show no step, whatever is fitted. */
+const fewestPoints = 5;
+/** Points beyond the fitted quantities, so that there is something left to judge the noise by. */
+export const sparePoints = 2;
+
+/** Why a run is not even tried; null where nothing stands against it. */
+export function obstacleToFit(run: Run, used: UsedPoints, shape: ShapeOfRun, sheet: Sheet): RunEnding | null {
+  const count = used.volumes.length;
+  if (count === 0)
+    return {
+      code: 'all-rows-excluded',
+      message: 'Every row is excluded or not accepted. Take rows back, or mend the file at the lines named.',
+    };
+  if (shape.volumesRunBackwards) {
+    const line = run.rows[used.rows[Math.min(1, count - 1)]].line;
+    return {
+      code: 'volumes-run-backwards',
+      message: `The volumes fall from row to row (from line ${line} on), so that they are no volumes added. Export the volume dispensed, or turn burette readings that count down into it.`,
+    };
+  }
+  const problem = buildProblem([{ sheet, volumes: used.volumes, readings: used.readings }]);
+  if (!problem.ok) return null;
+  const fitted = problem.value.parameters.filter(({ kind }) => kind === 'fitted').length;
+  const distinct = new Set(used.volumes).size;
+  const needed = Math.max(fewestPoints, fitted + sparePoints);
+  return fitted > 0 && distinct < needed ? tooFewPoints(distinct, needed) : null;
+}
+
+export function tooFewPoints(count: number, needed: number): RunEnding {
+  return {
+    code: 'too-few-points',
+    message: `${count === 1 ? '1 point' : `${count} points`} at different volumes cannot be fitted; at least ${needed} are needed for what is to be found. Titrate with smaller increments or declare more of the quantities.`,
+  };
+}
+
+const codes: Record<EndingCode, RunEndingCode> = {
+  'gradient-converged': 'fitted',
+  'step-converged': 'fitted',
+  'cost-converged': 'fitted',
+  'no-parameters': 'predicted',
+  'iteration-limit': 'not-converged',
+  stuck: 'not-converged',
+  'start-not-computable': 'no-solution',
+  stopped: 'stopped',
+};
+
+/** What the end of a fit means for its run. */
+export function endingOfFit({ fit }: FitFromScratch): RunEnding {
+  const fitted = fit.weighted.problem.parameters.some(({ kind }) => kind === 'fitted');
+  const code = codes[fit.ending];
+  return { code: code === 'fitted' && !fitted ? 'predicted' : code, message: endings[fit.ending].message };
+}
