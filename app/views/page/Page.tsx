@@ -1,0 +1,82 @@
+import { useCallback, useRef, useState } from 'react';
+import type { Desk } from '../../state/createDesk.ts';
+import { toggleRow } from '../../state/toggleRow.ts';
+import { useShownRun } from '../../state/useShownRun.ts';
+import { Conditions } from '../conditions/Conditions.tsx';
+import { DropOverlay } from '../drop/DropOverlay.tsx';
+import { Masthead } from '../masthead/Masthead.tsx';
+import { RunChooser } from '../masthead/RunChooser.tsx';
+import { NotAccepted } from '../notices/NotAccepted.tsx';
+import { WorkLine } from '../notices/WorkLine.tsx';
+import { Results } from '../results/Results.tsx';
+import { RowsTable } from '../rows/RowsTable.tsx';
+import { CrossedFigure } from './FigurePlaceholder.tsx';
+import { useUndoKeys } from './useUndoKeys.ts';
+
+/** The one page: conditions, figure, results. */
+export function Page({ desk }: { readonly desk: Desk }) {
+  const shown = useShownRun();
+  const [selectedLine, setSelectedLine] = useState<number | null>(null);
+  const picker = useRef<HTMLInputElement>(null);
+  useUndoKeys();
+  const openFiles = useCallback((files: readonly File[]) => void desk.open(files), [desk]);
+  const choose = useCallback(() => picker.current?.click(), []);
+
+  return (
+    <>
+      <Masthead onOpenFiles={choose} onOpenSample={(index) => void desk.openSample(index)} />
+      <input
+        ref={picker}
+        type="file"
+        multiple
+        hidden
+        aria-label="Files to open"
+        onChange={(event) => {
+          openFiles([...(event.target.files ?? [])]);
+          // So that the same file can be chosen again.
+          event.target.value = '';
+        }}
+      />
+      <main>
+        <NotAccepted />
+        <RunChooser />
+        {shown !== null && shown.sheet !== null && (
+          <Conditions
+            key={`${shown.input.file} ${shown.input.index}`}
+            run={shown.run}
+            file={shown.input.sheet}
+            sheet={shown.sheet}
+            onOpenFiles={choose}
+          />
+        )}
+        <WorkLine onStop={desk.stop} onRetry={desk.retry} />
+        {shown !== null && (
+          <div className="findings" aria-busy={!shown.isCurrent}>
+            <div className="figure-side">
+              {shown.result === null ? (
+                <div className="figure-empty" />
+              ) : (
+                <CrossedFigure result={shown.result} onToggleRow={toggleRow} selectedLine={selectedLine} />
+              )}
+              <RowsTable
+                run={shown.run}
+                points={shown.isCurrent ? (shown.result?.points ?? []) : []}
+                selectedLine={selectedLine}
+                onSelect={setSelectedLine}
+                onToggle={toggleRow}
+              />
+            </div>
+            {shown.result !== null && <Results result={shown.result} />}
+          </div>
+        )}
+      </main>
+      <footer className="page-foot">
+        <p>
+          Results support the laboratory’s own procedures and qualified judgement; they do not replace them. Nothing
+          leaves this page. The sample runs are invented.
+        </p>
+      </footer>
+      <DropOverlay onFiles={openFiles} />
+    </>
+  );
+}

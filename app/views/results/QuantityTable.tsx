@@ -1,0 +1,98 @@
+import { Fragment, useState } from 'react';
+import type { Doubt, QuantityResult } from '../../../core/index.ts';
+import { DoubtNote } from '../../widgets/DoubtNote.tsx';
+import { QuantityRow } from './QuantityRow.tsx';
+import { scaleOf } from './scaleOf.ts';
+
+interface Props {
+  readonly quantities: readonly QuantityResult[];
+  /** Doubts that concern one quantity; shown under it. */
+  readonly doubts: readonly Doubt[];
+}
+
+/** All quantities of the run: the fitted ones first, then what was declared with an uncertainty, then the exact ones. */
+export function QuantityTable({ quantities, doubts }: Props) {
+  const [showsExact, setShowsExact] = useState(false);
+  const fitted = quantities.filter(({ state }) => state === 'fitted');
+  const exact = quantities.filter(isExact);
+  const declared = quantities.filter((quantity) => quantity.state !== 'fitted' && !isExact(quantity));
+  const labels = new Map(quantities.map(({ id, label }) => [id, label]));
+
+  const rows = (group: readonly QuantityResult[]) =>
+    group.map((quantity) => (
+      <Fragment key={quantity.id}>
+        <QuantityRow quantity={quantity} halfWidth={scaleOf(quantity, quantities)} labels={labels} />
+        {doubts
+          .filter(({ place }) => place.quantity === quantity.id)
+          .map((doubt) => (
+            <tr key={doubt.code} className="doubt-row">
+              <td colSpan={5}>
+                <DoubtNote doubt={doubt} />
+              </td>
+            </tr>
+          ))}
+      </Fragment>
+    ));
+
+  return (
+    <table className="quantities">
+      <caption className="unseen">Quantities of the run</caption>
+      <thead>
+        <tr>
+          <th scope="col">quantity</th>
+          <th scope="col" className="number">
+            value
+          </th>
+          <th scope="col" className="number">
+            u
+          </th>
+          <th scope="col">unit</th>
+          <th scope="col">95 % interval</th>
+        </tr>
+      </thead>
+      {fitted.length > 0 && (
+        <tbody>
+          <GroupHead text="Fitted" />
+          {rows(fitted)}
+        </tbody>
+      )}
+      {declared.length > 0 && (
+        <tbody>
+          <GroupHead text="Known or assumed, and what the run makes of them" />
+          {rows(declared)}
+        </tbody>
+      )}
+      {exact.length > 0 && (
+        <tbody>
+          <tr className="group-head">
+            <th colSpan={5} scope="rowgroup">
+              <button
+                type="button"
+                className="link"
+                aria-expanded={showsExact}
+                onClick={() => setShowsExact(!showsExact)}
+              >
+                {showsExact ? 'Fewer: without' : 'All: with'} {exact.length} taken as exact
+              </button>
+            </th>
+          </tr>
+          {showsExact && rows(exact)}
+        </tbody>
+      )}
+    </table>
+  );
+}
+
+function GroupHead({ text }: { readonly text: string }) {
+  return (
+    <tr className="group-head">
+      <th colSpan={5} scope="rowgroup">
+        {text}
+      </th>
+    </tr>
+  );
+}
+
+function isExact({ state, u }: QuantityResult): boolean {
+  return state !== 'fitted' && u === null;
+}
