@@ -39,5 +39,6 @@ export function estimateReadingNoise(
     if (excess(middle) > 0) low = middle;
     else high = middle;
   }
-  return Math.sqrt(low * high);
+  // The bracket holds variances, and its middle is their geometric mean.
+  return (low * high) ** 0.25;
 }

@@ -11,11 +11,14 @@ import { WeightedProblem } from './weightedProblem.ts';
 /** Reading noise assumed for the first weights, in pH; the readings correct it at once. */
 const firstReadingNoise = 0.02;
 /** Rounds of weighing and fitting; the weights change the answer little, so that a few suffice. */
-const mostRounds = 15;
+const mostRounds = 30;
 /** The solution stands still when parameters move by less than this part of their uncertainty. */
 const standstill = 1e-4;
 /** The same for the noise, relative. */
 const noiseStandstill = 1e-4;
+/** Weights that move the solution by more than this part of the last move are taken up more slowly from then on. */
+const slowdown = 0.5;
+const slowestPace = 0.5;
 /** Cost tolerance while the weights still change; what it leaves over the next round takes up. */
 const roughCostTolerance = 1e-5;
 /** Change of the whitened residuals, in standard uncertainties, that no longer matters. */
@@ -69,6 +72,8 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
   });
 
   let parameters = start;
+  let previousMove = Number.POSITIVE_INFINITY;
+  let pace = 1;
   for (let round = 0; ; round++) {
     const rough = round === 0;
     const result = solveLeastSquares(weighted, parameters, {
@@ -93,6 +98,7 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
     };
     if (!usable || round === mostRounds) return finish();
 
+    weighted.refreshSlopes();
     const next = readings.map((reading, r) => {
       if (!(freedom[r] > 0)) return reading;
       const { sigma, slopes, firstResidual } = weighted.runs[r];
@@ -101,9 +107,14 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
     });
     const noiseMoved = next.some((reading, r) => Math.abs(reading / readings[r] - 1) > noiseStandstill);
     if (!rough && moved < standstill && !noiseMoved) return finish();
-    readings = next;
+    // Where the model is far from the readings, full weights can swing from one solution to another and back.
+    if (round > 1 && moved > slowdown * previousMove) pace = Math.max(slowestPace, 0.5 * pace);
+    previousMove = moved;
+    readings = readings.map((reading, r) => towards(reading, next[r], pace));
     weighted.runs.forEach(({ slopes, sigma }, r) => {
-      writeSigma(noiseAt(declarations[r], readings[r]), slopes, sigma);
+      const target = new Float64Array(sigma.length);
+      writeSigma(noiseAt(declarations[r], next[r]), slopes, target);
+      for (let i = 0; i < sigma.length; i++) sigma[i] = towards(sigma[i], target[i], round === 0 ? 1 : pace);
     });
   }
 }
@@ -167,4 +178,9 @@ function stepLimitsOf(problem: Problem): Float64Array {
       if (role.kind === 'acidity' && binding.kind === 'parameter') limits[binding.parameter] = constantStepLimit;
     });
   return limits;
+}
+
+/** A positive number on its way to another, by a part of their ratio. */
+function towards(from: number, to: number, pace: number): number {
+  return pace === 1 ? to : from * (to / from) ** pace;
 }

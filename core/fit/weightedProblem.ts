@@ -13,7 +13,7 @@ export interface WeightedRun {
   readonly values: Float64Array;
   /** Predicted readings there. */
   readonly predicted: Float64Array;
-  /** d reading / d burette volume at the last derivatives, unit/mL. */
+  /** d reading / d burette volume where the curve passes the readings, unit/mL; see `refreshSlopes`. */
   readonly slopes: Float64Array;
   /** Standard uncertainty of each residual, in the unit of the reading; set by whoever weighs the points. */
   readonly sigma: Float64Array;
@@ -44,6 +44,7 @@ export class WeightedProblem implements LeastSquaresProblem {
     readonly wanted: Int32Array;
     readonly terms: readonly (readonly { readonly parameter: number; readonly sensitivity: number }[])[];
     readonly derivatives: Float64Array;
+    readonly slopes: Float64Array;
   }[];
 
   constructor(problem: Problem) {
@@ -76,6 +77,7 @@ export class WeightedProblem implements LeastSquaresProblem {
         wanted,
         terms: Array.from(wanted, (quantity) => terms[quantity]),
         derivatives: new Float64Array(wanted.length * run.volumes.length),
+        slopes: new Float64Array(run.volumes.length),
       };
     });
   }
@@ -103,8 +105,8 @@ export class WeightedProblem implements LeastSquaresProblem {
     if (!kept) this.derivativeEvaluations++;
     jacobian.fill(0);
     this.runs.forEach((weighted, r) => {
-      const { model, predicted, slopes, sigma, firstResidual } = weighted;
-      const { wanted, terms, derivatives } = this.moving[r];
+      const { model, predicted, sigma, firstResidual } = weighted;
+      const { wanted, terms, derivatives, slopes } = this.moving[r];
       const count = sigma.length;
       if (!kept) {
         model.differentiate(wanted, derivatives, slopes);
@@ -122,6 +124,11 @@ export class WeightedProblem implements LeastSquaresProblem {
     });
     this.keptParameters.set(parameters);
     return true;
+  }
+
+  /** Takes the slopes that weigh the volume errors from the curve asked last. */
+  refreshSlopes(): void {
+    for (const { run, model, slopes } of this.runs) model.slopesAtReadings(run.readings, slopes);
   }
 
   private isKept(parameters: Float64Array): boolean {

@@ -44,12 +44,13 @@ export function equivalenceVolumes(design: RunDesign, values: Float64Array): Equ
 
   /** The volume for one analyte in one form; null where the titrant leads away from it. */
   const volumeFor = (target: number, form: number): { volume: number; countedAs: string } | null => {
+    // From the sample on, so that of several volumes that agree with themselves the first one is found.
     let volume = 0;
     for (let round = 0; round < mostRounds; round++) {
-      if (round > 0) vessels.mix(volume, mixture);
-      const solved = round > 0 && equilibrium.solve(mixture, neutralLogHydrogen, startIonicStrength);
+      vessels.mix(volume, mixture);
+      if (!equilibrium.solve(mixture, neutralLogHydrogen, startIonicStrength)) return null;
       design.systems.forEach((system, s) => {
-        const lost = s === target ? form : solved ? Math.round(equilibrium.balance.meanLost[s]) : startForm(system);
+        const lost = s === target ? form : Math.round(equilibrium.balance.meanLost[s]);
         charges[firstSystem + s] = system.shape.chargeFullyProtonated - lost;
       });
       const next = (-chargeOf(vessels.sample, charges) * vessels.sampleVolume) / chargeOf(vessels.titrant, charges);
@@ -130,6 +131,9 @@ function gradientOf(design: RunDesign, vessels: Vessels, charges: Float64Array, 
   });
 }
 
+/** Forms of carbonate by their protons. */
+const carbonateForms = ['CO₃²⁻', 'HCO₃⁻', 'CO₂'];
+
 /** Which form of every other substance was counted, for the remark beside the volume. */
 function describeForms(design: RunDesign, charges: Float64Array, target: number): string {
   return design.systems
@@ -137,6 +141,7 @@ function describeForms(design: RunDesign, charges: Float64Array, target: number)
       if (s === target) return [];
       const charge = charges[firstSystem + s];
       const protons = system.shape.groups - (system.shape.chargeFullyProtonated - charge);
+      if (system.role === 'carbonate') return [`carbonate counted as ${carbonateForms[protons]}`];
       return [`${system.name} counted with ${protons === 1 ? '1 proton' : `${protons} protons`} left`];
     })
     .join(', ');

@@ -7,6 +7,8 @@ import { Vessels } from './vessels.ts';
 
 /** Ionic strength from which the very first solution of a point starts, mol/L. */
 const firstIonicStrength = 0.02;
+/** ln[H⁺] by which a reading may lie off the curve and still say where on the curve it belongs: two pH units. */
+const largestMiss = 2 * Math.LN10;
 /** pH from which a point without a reading starts. */
 const neutral = 7;
 
@@ -183,6 +185,33 @@ export class RunModel {
             break;
         }
       }
+    }
+  }
+
+  /**
+   * Writes the slope d reading/dV that the curve has where it passes each
+   * measured *reading*, at the values predicted last; unit/mL.
+   *
+   * A volume error moves a point along the curve, so that the slope belongs to
+   * the height of the point, not to its volume: on a steep step the slope at
+   * the volume changes tenfold with the smallest change of the constants.
+   */
+  slopesAtReadings(readings: Float64Array, slopes: Float64Array): void {
+    const { equilibrium, vessels, volumes, mixture, scale } = this;
+    const { balance, byComposition } = equilibrium;
+    const activity = this.design.scale === 'activity' && balance.davies;
+    for (let i = 0; i < volumes.length; i++) {
+      const total = vessels.mix(vessels.gain * volumes[i], mixture);
+      const ionic = this.ionicStrength[i];
+      const activityTerm = activity ? balance.lnA * daviesFunction(ionic) : 0;
+      const read = activityTerm - scale.negativeLog(readings[i]) * Math.LN10;
+      // A reading that means no pH at all must not decide its own weight.
+      const x = Math.max(this.logHydrogen[i] - largestMiss, Math.min(this.logHydrogen[i] + largestMiss, read));
+      balance.evaluate(mixture, x, ionic);
+      equilibrium.differentiate(mixture, -scale.perNegativeLog / Math.LN10, 0);
+      let slope = 0;
+      for (let c = 0; c < mixture.length; c++) slope += (byComposition[c] * (vessels.titrant[c] - mixture[c])) / total;
+      slopes[i] = slope * vessels.gain;
     }
   }
 

@@ -1,10 +1,10 @@
-import type { DerivativeEndpoint } from '../endpoints/derivativeEndpoints.ts';
 import type { ProblemFit } from '../fit/fitProblem.ts';
 import type { WeightedRun } from '../fit/weightedProblem.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
 import type { Speciation } from '../speciation/speciation.ts';
 import type { EquivalenceResult, PointResult, QuantityResult } from './runResult.ts';
+import type { StepsOfReadings } from './stepsOfReadings.ts';
 
 /** A fitted run with everything the results and the checks are drawn from. */
 export interface Analysis {
@@ -18,9 +18,9 @@ export interface Analysis {
   /** Different minima in which the automatic starts ended. */
   readonly minima: number;
   readonly speciation: Speciation;
-  /** Steps of the readings and of the fitted curve at the same volumes. */
-  readonly readSteps: readonly DerivativeEndpoint[];
-  readonly curveSteps: readonly DerivativeEndpoint[];
+  /** Steps of the readings, and of the fitted curve taken at the same volumes. */
+  readonly readSteps: StepsOfReadings;
+  readonly curveSteps: StepsOfReadings;
   readonly quantities: readonly QuantityResult[];
   readonly equivalence: readonly EquivalenceResult[];
   readonly points: readonly PointResult[];

@@ -1,11 +1,10 @@
-import type { DerivativeEndpoint } from '../endpoints/derivativeEndpoints.ts';
-import type { GranVolume } from '../endpoints/gran.ts';
 import type { ProblemFit } from '../fit/fitProblem.ts';
 import { parameterGradient, uncertaintyOf } from '../fit/uncertaintyOf.ts';
 import type { WeightedRun } from '../fit/weightedProblem.ts';
 import { equivalenceVolumes } from '../model/equivalenceVolumes.ts';
 import { numberOrNull } from './numberOrNull.ts';
 import type { EquivalenceResult } from './runResult.ts';
+import type { StepsOfReadings } from './stepsOfReadings.ts';
 
 /** Equivalence volumes of every step by the fit. */
 export function equivalenceByFit(fit: ProblemFit, weighted: WeightedRun): EquivalenceResult[] {
@@ -30,11 +29,10 @@ export function equivalenceByFit(fit: ProblemFit, weighted: WeightedRun): Equiva
  * a step near none keeps its own number and no analyte.
  */
 export function equivalenceByReadings(
-  steps: readonly DerivativeEndpoint[],
-  gran: readonly GranVolume[],
+  { derivative, gran }: StepsOfReadings,
   fitted: readonly EquivalenceResult[],
 ): EquivalenceResult[] {
-  const results: EquivalenceResult[] = steps.map((step, index) => ({
+  const results: EquivalenceResult[] = derivative.map((step, index) => ({
     ...nameOf(step.volume_mL, index + 1, fitted),
     volume_mL: step.volume_mL,
     u: step.u_mL,

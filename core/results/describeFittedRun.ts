@@ -1,4 +1,3 @@
-import { derivativeEndpoints } from '../endpoints/derivativeEndpoints.ts';
 import type { ShapeOfRun } from '../endpoints/shapeOfRun.ts';
 import type { FitFromScratch } from '../fit/fitFromScratch.ts';
 import type { Ladder } from '../inference/chooseGroups.ts';
@@ -37,9 +36,10 @@ export function describeFittedRun(
   const noise = fit.noise[index];
   const asPH = readingAsPH(design, weighted.values, middle(weighted.model.ionicStrength));
   const titrant = directionOfTitrant(shape, design.readingKind);
-  const { derivative, gran } = stepsOfReadings(design, used, asPH, titrant, noise.reading);
+  const readSteps = stepsOfReadings(design, used, asPH, titrant, noise.reading);
+  const curveSteps = stepsOfReadings(design, { ...used, readings: weighted.predicted }, asPH, titrant, noise.reading);
   const byFit = equivalenceByFit(fit, weighted);
-  const equivalence = [...byFit, ...equivalenceByReadings(derivative, gran, byFit)];
+  const equivalence = [...byFit, ...equivalenceByReadings(readSteps, byFit)];
   const stepVolumes = byFit.flatMap(({ volume_mL }) => (volume_mL === null ? [] : [volume_mL]));
   const curve = drawCurve(weighted, stepVolumes, asPH.pH);
   const speciation = new Speciation(design, weighted.values, alongCurve(curve));
@@ -54,8 +54,8 @@ export function describeFittedRun(
     weighted,
     minima,
     speciation,
-    readSteps: derivative,
-    curveSteps: derivativeEndpoints(used.volumes, weighted.predicted, { uReading: noise.reading }),
+    readSteps,
+    curveSteps,
     quantities,
     equivalence,
     points,

@@ -22,13 +22,13 @@ export function describeUnfittedRun(
   const design = designRun(sheet);
   const asPH = readingAsPH(design, null, null);
   const titrant = directionOfTitrant(shape, design.readingKind);
-  const { derivative, gran } = stepsOfReadings(design, used, asPH, titrant, sheet.reading.uncertainty);
+  const steps = stepsOfReadings(design, used, asPH, titrant, sheet.reading.uncertainty);
   return {
     run,
     sheet,
     ending,
     quantities: describeUnfitted(design),
-    equivalence: equivalenceByReadings(derivative, gran, []),
+    equivalence: equivalenceByReadings(steps, []),
     noise: null,
     doubts: run.doubts,
     ladder: null,

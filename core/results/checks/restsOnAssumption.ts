@@ -1,26 +1,31 @@
 import type { Doubt } from '../../notice/doubt.ts';
 import type { Analysis } from '../analysis.ts';
 
-/** One doubt for every assumption that results rest on. */
-export function restsOnAssumption({ quantities }: Analysis): Doubt[] {
-  const resting = new Map<string, string[]>();
-  for (const { id, state, restsOn } of quantities)
-    if (state === 'fitted')
-      for (const assumption of restsOn) resting.set(assumption, [...(resting.get(assumption) ?? []), id]);
-  return [...resting].map(([assumption, ids]): Doubt => {
-    const label = quantities.find(({ id }) => id === assumption)?.label ?? conditionLabels[assumption] ?? assumption;
-    return {
-      code: 'rests-on-assumption',
-      seen: `The ${label} was not declared; ${ids.join(', ')} ${ids.length === 1 ? 'rests' : 'rest'} on the value assumed for it.`,
-      means: 'If the assumption is wrong, so is the result, whatever its uncertainty says.',
-      remedy: `Declare or confirm the ${label}.`,
-      place: { quantity: assumption },
-    };
-  });
-}
-
+/** Labels of conditions that are no quantities. */
 const conditionLabels: Record<string, string> = {
   'medium.temperature': 'temperature',
   'medium.activity': 'activity model',
   'reading.scale': 'scale of the readings',
 };
+
+/** One doubt for every set of results that rest on the same assumptions. */
+export function restsOnAssumption({ quantities }: Analysis): Doubt[] {
+  const labelOf = (id: string) => quantities.find((quantity) => quantity.id === id)?.label ?? conditionLabels[id] ?? id;
+  const resting = new Map<string, { results: string[]; assumptions: readonly string[] }>();
+  for (const { id, state, restsOn } of quantities) {
+    if (state !== 'fitted' || restsOn.length === 0) continue;
+    const key = restsOn.join(' ');
+    const entry = resting.get(key) ?? { results: [], assumptions: restsOn };
+    entry.results.push(id);
+    resting.set(key, entry);
+  }
+  return [...resting.values()].map(
+    ({ results, assumptions }): Doubt => ({
+      code: 'rests-on-assumption',
+      seen: `${results.map(labelOf).join(', ')} ${results.length === 1 ? 'rests' : 'rest'} on values that nobody has declared: ${assumptions.map(labelOf).join(', ')}.`,
+      means: 'Where an assumption is wrong, so is the result, whatever its uncertainty says.',
+      remedy: 'Declare these values, or confirm the ones assumed.',
+      place: { quantity: assumptions[0] },
+    }),
+  );
+}
