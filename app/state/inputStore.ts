@@ -27,6 +27,8 @@ export function changeInputs(words: string, change: (inputs: Inputs) => Inputs):
   inputStore.setState(({ present, past }) => {
     const next = change(present);
     if (next === present) return {};
+    // The run with which the page opens is where history begins.
+    if (present.runs.length === 0) return { present: next };
     return { present: next, past: [...past, { words, inputs: present }].slice(-longestPast), future: [] };
   });
 }

@@ -25,7 +25,8 @@ export function Popover({ label, anchor, onLeave, onCancel, children }: Props) {
     const own = box.current;
     const frame = own?.offsetParent;
     if (own === null || !(frame instanceof HTMLElement)) return;
-    const at = anchor.getBoundingClientRect();
+    // An anchor that breaks across lines has a box on each; the form opens under the last.
+    const at = [...anchor.getClientRects()].at(-1) ?? anchor.getBoundingClientRect();
     const within = frame.getBoundingClientRect();
     const rightmost = Math.max(0, within.width - own.offsetWidth);
     setPlace({ left: Math.min(Math.max(0, at.left - within.left), rightmost), top: at.bottom - within.top + gap });

@@ -29,16 +29,23 @@ function FieldButton({
 }) {
   const { id, label, text, assumed, isName } = field;
   return (
-    <button
-      type="button"
+    // biome-ignore lint/a11y/useSemanticElements: a <button> cannot break across lines, and this is running text
+    <span
+      role="button"
+      tabIndex={0}
       className={`field${assumed ? ' assumed' : ''}${isName === true ? ' name' : ''}`}
       data-field={id}
       aria-label={`${label}: ${text}${assumed ? ', assumed' : ''}`}
       aria-haspopup="dialog"
       aria-expanded={isOpen}
       onClick={(event) => onOpen(id, event.currentTarget)}
+      onKeyDown={(event) => {
+        if (event.key !== 'Enter' && event.key !== ' ') return;
+        event.preventDefault();
+        onOpen(id, event.currentTarget);
+      }}
     >
       {text}
-    </button>
+    </span>
   );
 }

@@ -1,7 +1,7 @@
 import type { Declaration, QuantityFile } from '../../../core/index.ts';
 import { formatDeclared } from '../../widgets/formatQuantity.ts';
 
-/** A declared quantity in the words of a method section: "0.1002 M, u = 0.0002 M". */
+/** A declared quantity in the words of a method section: "0.1002 M (u = 0.0002 M)". */
 export function declarationWords(
   declaration: Declaration,
   written: QuantityFile | undefined,
@@ -16,8 +16,8 @@ export function declarationWords(
     if (declaration.value === 0 && words.whenZero !== undefined) return words.whenZero;
     return `${withUnit(declaration.value, words.decimals, words.unit)}${behind}`;
   }
-  const value = `${withUnit(declaration.value, words.decimals, words.unit)}${behind}`;
-  return `${value}, ${uncertaintyWords(declaration, written, words.unit)}`;
+  const value = withUnit(declaration.value, words.decimals, words.unit);
+  return `${value} (${uncertaintyWords(declaration, written, words.unit)})${behind}`;
 }
 
 function uncertaintyWords(
@@ -25,9 +25,9 @@ function uncertaintyWords(
   written: QuantityFile | undefined,
   unit: string,
 ): string {
-  if (typeof written === 'object' && 'U' in written) return `U = ${withUnit(written.U, 0, unit)} (k = ${written.k})`;
+  if (typeof written === 'object' && 'U' in written) return `U = ${withUnit(written.U, 0, unit)}, k = ${written.k}`;
   if (typeof written === 'object' && 'tolerance' in written)
-    return `tolerance ±${withUnit(written.tolerance, 0, unit)} (${written.distribution})`;
+    return `tolerance ±${withUnit(written.tolerance, 0, unit)}, ${written.distribution}`;
   return `u = ${withUnit(declaration.u, 0, unit)}`;
 }
 

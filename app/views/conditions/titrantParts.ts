@@ -4,14 +4,14 @@ import { choiceField, quantityField, textField } from './fields.ts';
 import type { SentencePart } from './sentence.ts';
 
 const kinds: Readonly<Record<Exclude<TitrantKind, 'solution'>, { readonly label: string }>> = {
-  base: { label: 'strong base' },
-  acid: { label: 'strong acid' },
+  base: { label: 'a strong base' },
+  acid: { label: 'a strong acid' },
 };
 
 const meanings: Readonly<Record<StrengthMeaning, { readonly label: string; readonly detail: string }>> = {
   hydroxide: { label: 'hydroxide alone', detail: 'Carbonate comes on top of the stated strength.' },
   toHydrogencarbonate: {
-    label: 'hydroxide and carbonate to hydrogencarbonate',
+    label: 'hydroxide and carbonate, to hydrogencarbonate',
     detail: 'What a standardisation against a primary acid to about pH 8 gives.',
   },
   totalBase: {
@@ -20,7 +20,7 @@ const meanings: Readonly<Record<StrengthMeaning, { readonly label: string; reado
   },
 };
 
-/** "titrated with 0.1002 M strong base (NaOH), u = 0.0002 M, carrying no carbonate". */
+/** "titrated with 0.1002 M (u = 0.0002 M) NaOH, a strong base, carrying no carbonate". */
 export function titrantParts(file: SheetFile, sheet: Sheet): SentencePart[] {
   const { titrant } = sheet;
   const carbonate = quantityField(
@@ -44,25 +44,25 @@ export function titrantParts(file: SheetFile, sheet: Sheet): SentencePart[] {
       : [];
   return [
     ', titrated with ',
-    choiceField(
-      { id: 'titrant.kind', label: 'kind of titrant', path: ['titrant', 'kind'] },
-      { value: titrant.kind.value, assumed: titrant.kind.assumed },
-      kinds,
-    ),
-    ' ',
-    textField(
-      { id: 'titrant.name', label: 'name of the titrant', path: ['titrant', 'name'] },
-      titrant.name ?? '',
-      'unnamed',
-    ),
-    ' of ',
     quantityField(
       file,
       { id: 'titrant.concentration', label: 'titrant strength', path: ['titrant', 'concentration_M'] },
       titrant.concentration,
       { unit: 'M', decimals: 4 },
     ),
-    ' carrying ',
+    ' ',
+    textField(
+      { id: 'titrant.name', label: 'name of the titrant', path: ['titrant', 'name'] },
+      titrant.name ?? '',
+      'titrant',
+    ),
+    ', ',
+    choiceField(
+      { id: 'titrant.kind', label: 'kind of titrant', path: ['titrant', 'kind'] },
+      { value: titrant.kind.value, assumed: titrant.kind.assumed },
+      kinds,
+    ),
+    ', carrying ',
     carbonate,
     ...meaning,
   ];

@@ -3,14 +3,15 @@ import type { Desk } from '../../state/createDesk.ts';
 import { toggleRow } from '../../state/toggleRow.ts';
 import { useShownRun } from '../../state/useShownRun.ts';
 import { Conditions } from '../conditions/Conditions.tsx';
+import { declaredQuantities } from '../conditions/declaredQuantities.ts';
 import { DropOverlay } from '../drop/DropOverlay.tsx';
+import { CrossedFigure } from '../figure/CrossedFigure.tsx';
 import { Masthead } from '../masthead/Masthead.tsx';
 import { RunChooser } from '../masthead/RunChooser.tsx';
 import { NotAccepted } from '../notices/NotAccepted.tsx';
 import { WorkLine } from '../notices/WorkLine.tsx';
 import { Results } from '../results/Results.tsx';
 import { RowsTable } from '../rows/RowsTable.tsx';
-import { CrossedFigure } from './FigurePlaceholder.tsx';
 import { useUndoKeys } from './useUndoKeys.ts';
 
 /** The one page: conditions, figure, results. */
@@ -66,7 +67,9 @@ export function Page({ desk }: { readonly desk: Desk }) {
                 onToggle={toggleRow}
               />
             </div>
-            {shown.result !== null && <Results result={shown.result} />}
+            {shown.result !== null && (
+              <Results result={shown.result} declared={declaredQuantities(shown.input.sheet, shown.result.sheet)} />
+            )}
           </div>
         )}
       </main>

@@ -1,17 +1,19 @@
 import { Fragment, useState } from 'react';
-import type { Doubt, QuantityResult } from '../../../core/index.ts';
+import type { Declaration, Doubt, QuantityResult } from '../../../core/index.ts';
 import { DoubtNote } from '../../widgets/DoubtNote.tsx';
+import { intervalScale } from './intervalScale.ts';
 import { QuantityRow } from './QuantityRow.tsx';
-import { scaleOf } from './scaleOf.ts';
 
 interface Props {
   readonly quantities: readonly QuantityResult[];
   /** Doubts that concern one quantity; shown under it. */
   readonly doubts: readonly Doubt[];
+  /** What the sheet says, by id. */
+  readonly declared: ReadonlyMap<string, Declaration>;
 }
 
 /** All quantities of the run: the fitted ones first, then what was declared with an uncertainty, then the exact ones. */
-export function QuantityTable({ quantities, doubts }: Props) {
+export function QuantityTable({ quantities, doubts, declared: declarations }: Props) {
   const [showsExact, setShowsExact] = useState(false);
   const fitted = quantities.filter(({ state }) => state === 'fitted');
   const exact = quantities.filter(isExact);
@@ -21,7 +23,11 @@ export function QuantityTable({ quantities, doubts }: Props) {
   const rows = (group: readonly QuantityResult[]) =>
     group.map((quantity) => (
       <Fragment key={quantity.id}>
-        <QuantityRow quantity={quantity} halfWidth={scaleOf(quantity, quantities)} labels={labels} />
+        <QuantityRow
+          quantity={quantity}
+          scale={intervalScale(quantity, quantities, declarations.get(quantity.id))}
+          labels={labels}
+        />
         {doubts
           .filter(({ place }) => place.quantity === quantity.id)
           .map((doubt) => (
@@ -46,8 +52,9 @@ export function QuantityTable({ quantities, doubts }: Props) {
           <th scope="col" className="number">
             u
           </th>
-          <th scope="col">unit</th>
-          <th scope="col">95 % interval</th>
+          <th scope="col" colSpan={2}>
+            95 % interval
+          </th>
         </tr>
       </thead>
       {fitted.length > 0 && (

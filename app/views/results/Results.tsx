@@ -1,11 +1,17 @@
-import type { RunResult } from '../../../core/index.ts';
+import type { Declaration, RunResult } from '../../../core/index.ts';
 import { DoubtNote } from '../../widgets/DoubtNote.tsx';
 import { EquivalenceTable } from './EquivalenceTable.tsx';
 import { noiseWords } from './noiseWords.ts';
 import { QuantityTable } from './QuantityTable.tsx';
 
+interface Props {
+  readonly result: RunResult;
+  /** What the sheet says of each quantity, by id. */
+  readonly declared: ReadonlyMap<string, Declaration>;
+}
+
 /** Everything the run says: how the work ended, quantities, equivalence volumes, doubts. */
-export function Results({ result }: { readonly result: RunResult }) {
+export function Results({ result, declared }: Props) {
   const { ending, quantities, equivalence, noise, ladder } = result;
   const ids = new Set(quantities.map(({ id }) => id));
   const doubts = [...result.doubts, ...result.run.doubts.filter((doubt) => !result.doubts.includes(doubt))];
@@ -28,7 +34,7 @@ export function Results({ result }: { readonly result: RunResult }) {
       )}
       <div className="result-block">
         <h2>Quantities</h2>
-        <QuantityTable quantities={quantities} doubts={ofQuantities} />
+        <QuantityTable quantities={quantities} doubts={ofQuantities} declared={declared} />
       </div>
       {equivalence.length > 0 && (
         <div className="result-block">
