@@ -88,9 +88,11 @@ export class RunModel {
       logHydrogen[i] = x;
       ionicStrength[i] = ionic;
       const negativeLog = (activityTerm ? lnA * daviesFunction(ionic) - x : -x) / Math.LN10;
-      readings[i] = scale.hasJunction
-        ? scale.readingWithJunction(negativeLog, Math.exp(x), equilibrium.balance.hydroxide)
-        : scale.reading(negativeLog);
+      if (scale.hasJunction) {
+        // The balance was evaluated last before the final step, which [OH⁻] would feel.
+        equilibrium.balance.evaluate(mixture, x, ionic);
+        readings[i] = scale.readingWithJunction(negativeLog, Math.exp(x), equilibrium.balance.hydroxide);
+      } else readings[i] = scale.reading(negativeLog);
     }
     return true;
   }
