@@ -24,47 +24,74 @@ export function equivalenceByFit(fit: ProblemFit, weighted: WeightedRun): Equiva
   });
 }
 
+/** How far a step of the readings may lie from the fitted one it is named after: a tenth of the volume, and of 1 mL at least. */
+const namingReach = 0.1;
+
+interface StepName {
+  readonly analyte: string;
+  readonly step: number;
+}
+
 /**
- * Names the steps of the readings after the fitted ones they lie nearest to;
- * a step near none keeps its own number and no analyte.
+ * Names the steps of the readings after the fitted ones they lie nearest to:
+ * an inflection may lie off its equivalence point, but not as far as the next
+ * step. A fitted step gives its name once; a step that gets none keeps its own
+ * number and no analyte. Gran lines have the name of the step they lead to.
+ *
+ * @param volumes of the points from which the steps were read, mL
  */
 export function equivalenceByReadings(
   { derivative, gran }: StepsOfReadings,
   fitted: readonly EquivalenceResult[],
+  volumes: Float64Array,
 ): EquivalenceResult[] {
-  const results: EquivalenceResult[] = derivative.map((step, index) => ({
-    ...nameOf(step.volume_mL, index + 1, fitted),
-    volume_mL: step.volume_mL,
-    u: step.u_mL,
-    by: 'derivative' as const,
-    remark: `steepest point; ${step.pointsUsed[1] - step.pointsUsed[0] + 1} points around it`,
-  }));
+  const names = nameSteps(
+    derivative.map((step) => step.volume_mL),
+    fitted,
+  );
+  const results: EquivalenceResult[] = derivative.map((step, index) => {
+    const [from, to] = step.pointsUsed.map((i) => volumes[i]);
+    const pointsUsed = volumes.filter((volume) => volume >= from && volume <= to).length;
+    return {
+      ...names[index],
+      volume_mL: step.volume_mL,
+      u: step.u_mL,
+      by: 'derivative' as const,
+      remark: `steepest point; ${describeRange(pointsUsed, from, to)}`,
+    };
+  });
   for (const line of gran) {
     if (line.volume_mL === null) continue;
     results.push({
-      ...nameOf(line.volume_mL, line.step, fitted),
+      ...names[line.step - 1],
       volume_mL: line.volume_mL,
       u: line.u_mL,
       by: 'gran',
-      remark: `${line.kind}; ${line.pointsUsed} points from ${line.range_mL[0].toFixed(3)} to ${line.range_mL[1].toFixed(3)} mL`,
+      remark: `${line.kind}; ${describeRange(line.pointsUsed, ...line.range_mL)}`,
     });
   }
   return results;
 }
 
-function nameOf(
-  volume: number,
-  number: number,
-  fitted: readonly EquivalenceResult[],
-): { analyte: string; step: number } {
-  let nearest: { analyte: string; step: number; distance: number } | null = null;
-  for (const { analyte, step, volume_mL } of fitted) {
-    if (volume_mL === null) continue;
-    const distance = Math.abs(volume_mL - volume);
-    if (nearest === null || distance < nearest.distance) nearest = { analyte, step, distance };
+function describeRange(points: number, from: number, to: number): string {
+  return `${points} points from ${from.toFixed(3)} to ${to.toFixed(3)} mL`;
+}
+
+function nameSteps(volumes: readonly number[], fitted: readonly EquivalenceResult[]): StepName[] {
+  const names: StepName[] = volumes.map((_, index) => ({ analyte: '', step: index + 1 }));
+  const pairs = volumes.flatMap((volume, index) =>
+    fitted.flatMap((name) => {
+      const distance = Math.abs((name.volume_mL ?? Number.POSITIVE_INFINITY) - volume);
+      return distance < namingReach * Math.max(volume, 1) ? [{ index, name, distance }] : [];
+    }),
+  );
+  const named = new Set<number>();
+  const given = new Set<EquivalenceResult>();
+  for (const { index, name } of pairs.sort((a, b) => a.distance - b.distance)) {
+    if (named.has(index) || given.has(name)) continue;
+    names[index] = { analyte: name.analyte, step: name.step };
+    named.add(index);
+    given.add(name);
   }
-  // A tenth of the volume: an inflection may lie off its equivalence point, but not as far as the next step.
-  return nearest !== null && nearest.distance < 0.1 * Math.max(volume, 1)
-    ? { analyte: nearest.analyte, step: nearest.step }
-    : { analyte: '', step: number };
+  return names;
 }

@@ -39,7 +39,7 @@ export function describeFittedRun(
   const readSteps = stepsOfReadings(design, used, asPH, titrant, noise.reading);
   const curveSteps = stepsOfReadings(design, { ...used, readings: weighted.predicted }, asPH, titrant, noise.reading);
   const byFit = equivalenceByFit(fit, weighted);
-  const equivalence = [...byFit, ...equivalenceByReadings(readSteps, byFit)];
+  const equivalence = [...byFit, ...equivalenceByReadings(readSteps, byFit, used.volumes)];
   const stepVolumes = byFit.flatMap(({ volume_mL }) => (volume_mL === null ? [] : [volume_mL]));
   const curve = drawCurve(weighted, stepVolumes, asPH.pH);
   const speciation = new Speciation(design, weighted.values, alongCurve(curve));

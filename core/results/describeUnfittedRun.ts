@@ -28,7 +28,7 @@ export function describeUnfittedRun(
     sheet,
     ending,
     quantities: describeUnfitted(design),
-    equivalence: equivalenceByReadings(steps, []),
+    equivalence: equivalenceByReadings(steps, [], used.volumes),
     noise: null,
     doubts: run.doubts,
     ladder: null,
