@@ -6,6 +6,9 @@ export interface Figure {
   readonly layout: FigureLayout;
 }
 
+/** The library draws patterns such as `8px,4px` too; its types know only the named ones. */
+export type FigureDash = NonNullable<NonNullable<ScatterData['line']>['dash']>;
+
 export type FigureTrace = Partial<ScatterData> & { readonly type: 'scatter'; readonly name: string };
 export type FigureShape = Partial<Shape>;
 export type FigureAnnotation = Partial<Annotation>;

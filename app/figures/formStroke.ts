@@ -1,10 +1,12 @@
+import type { FigureDash } from './figure.ts';
+
 /** Dash pattern and width in px, as the plotting library takes them. */
 export interface FormStroke {
-  readonly dash: string;
+  readonly dash: FigureDash;
   readonly width: number;
 }
 
-const STROKES: readonly FormStroke[] = [
+const STROKES = [
   { dash: 'solid', width: 2 },
   { dash: '8px,4px', width: 1.8 },
   { dash: '2px,3px', width: 2 },
@@ -13,9 +15,10 @@ const STROKES: readonly FormStroke[] = [
   { dash: '4px,6px', width: 2.4 },
   { dash: '14px,3px,2px,3px,2px,3px', width: 1.6 },
   { dash: 'solid', width: 1.1 },
-];
+] as const;
 
 /** Patterns tell forms apart where colour is lost; the `index` runs over all forms of a run and starts again after eight. */
 export function formStroke(index: number): FormStroke {
-  return STROKES[index % STROKES.length];
+  const { dash, width } = STROKES[index % STROKES.length];
+  return { dash: dash as FigureDash, width };
 }

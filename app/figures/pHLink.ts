@@ -8,8 +8,8 @@ export interface PHLink {
   readonly separate: boolean;
 }
 
-/** A pH that differs from the reading by less than this lies within the thickness of a line. */
-const VISIBLE_PH = 0.015;
+/** A pH that differs from the reading by less than this is a few px away from it: no reason for a second axis. */
+const VISIBLE_PH = 0.1;
 
 /**
  * The straight line through the two points of the result that lie farthest
@@ -29,7 +29,9 @@ export function pHLink(result: RunResult): PHLink | null {
   const link = lineThrough(low, high);
   if (result.run.readingKind === 'mV') return link === null ? null : { ...link, separate: true };
   if (link === null || low === null || high === null) return { intercept: 0, slope: 1, separate: false };
-  const farthest = Math.max(...[low, high].map(({ reading, pH }: { reading: number; pH: number }) => Math.abs(reading - pH)));
+  const farthest = Math.max(
+    ...[low, high].map(({ reading, pH }: { reading: number; pH: number }) => Math.abs(reading - pH)),
+  );
   return farthest < VISIBLE_PH ? { ...link, separate: false } : { ...link, separate: true };
 }
 
