@@ -9,7 +9,7 @@ interface Props {
   readonly ground: readonly [number, number] | null;
 }
 
-const width = 72;
+const width = 60;
 const height = 12;
 const margin = 4;
 

@@ -35,6 +35,7 @@ export function Popover({ label, anchor, onLeave, onCancel, children }: Props) {
     first?.focus({ preventScroll: true });
     if (first instanceof HTMLInputElement && first.type === 'text') first.select();
     own.scrollIntoView({ block: 'nearest' });
+    first?.scrollIntoView({ block: 'nearest' });
     return () => anchor.focus({ preventScroll: true });
   }, [anchor]);
 

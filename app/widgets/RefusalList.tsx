@@ -11,6 +11,7 @@ export function RefusalList({ refusals }: { readonly refusals: readonly Refusal[
   const groups = groupRefusals(refusals);
   const shown = showsAll ? groups : groups.slice(0, mostShown);
   const left = groups.length - shown.length;
+  const severalFiles = new Set(refusals.map(({ place }) => place.file)).size > 1;
   return (
     <ul className="refusals">
       {shown.map((group) => (
@@ -18,7 +19,8 @@ export function RefusalList({ refusals }: { readonly refusals: readonly Refusal[
           key={JSON.stringify([group.first.code, group.first.place, group.first.message])}
           data-code={group.first.code}
         >
-          <span className="refusal-place">{placeWords(group)}</span> {group.first.message} <em>{group.first.remedy}</em>
+          <span className="refusal-place">{placeWords(group, severalFiles)}</span> {group.first.message}{' '}
+          <em>{group.first.remedy}</em>
         </li>
       ))}
       {left > 0 && (
@@ -32,12 +34,15 @@ export function RefusalList({ refusals }: { readonly refusals: readonly Refusal[
   );
 }
 
-function placeWords({ first, lines, count }: RefusalGroup): string {
-  const { column, key } = first.place;
+function placeWords({ first, lines, count }: RefusalGroup, namesFile: boolean): string {
+  const { column, file } = first.place;
+  const where: string[] = namesFile && file !== undefined ? [file] : [];
   if (count > 1 && lines.length > 0) {
     const listed = lines.slice(0, mostLines).join(', ');
-    return `Lines ${listed}${lines.length > mostLines ? ` and ${lines.length - mostLines} more` : ''}; the first:`;
+    const others = lines.length > mostLines ? ` and ${lines.length - mostLines} more` : '';
+    return `${[...where, `lines ${listed}${others}`].join(', ')}; the first:`;
   }
-  if (lines.length > 0) return `Line ${lines[0]}${column === undefined ? '' : `, column ${column}`}:`;
-  return key === undefined ? '' : `${key}:`;
+  if (lines.length > 0) where.push(`line ${lines[0]}`);
+  if (column !== undefined) where.push(`column ${column}`);
+  return where.length === 0 ? '' : `${where.join(', ')}:`;
 }

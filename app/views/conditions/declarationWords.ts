@@ -1,16 +1,30 @@
 import type { Declaration, QuantityFile } from '../../../core/index.ts';
 import { formatDeclared } from '../../widgets/formatQuantity.ts';
 
+/** How a quantity is put into words. */
+export interface QuantityWords {
+  readonly unit: string;
+  /** At least so many are written. */
+  readonly decimals: number;
+  /** What is said of nothing: "no carbonate". */
+  readonly whenZero?: string;
+  /** What there is so much of: "carbonate". */
+  readonly noun?: string;
+  /** Stands behind the number: "× the ideal". */
+  readonly behind?: string;
+}
+
 /** A declared quantity in the words of a method section: "0.1002 M (u = 0.0002 M)". */
 export function declarationWords(
   declaration: Declaration,
   written: QuantityFile | undefined,
-  words: { readonly unit: string; readonly decimals: number; readonly whenZero?: string; readonly behind?: string },
+  words: QuantityWords,
 ): string {
-  const behind = words.behind === undefined ? '' : ` ${words.behind}`;
+  const tail = words.noun ?? words.behind;
+  const behind = tail === undefined ? '' : ` ${tail}`;
   if (declaration.state === 'fitted') {
     const start = declaration.start === null ? '' : `, starting at ${withUnit(declaration.start, 0, words.unit)}`;
-    return `to be fitted${start}`;
+    return `${words.noun === undefined ? '' : `${words.noun} `}to be fitted${start}`;
   }
   if (declaration.state === 'fixed') {
     if (declaration.value === 0 && words.whenZero !== undefined) return words.whenZero;
@@ -25,10 +39,11 @@ function uncertaintyWords(
   written: QuantityFile | undefined,
   unit: string,
 ): string {
-  if (typeof written === 'object' && 'U' in written) return `U = ${withUnit(written.U, 0, unit)}, k = ${written.k}`;
+  if (typeof written === 'object' && 'U' in written)
+    return `U\u00a0=\u00a0${withUnit(written.U, 0, unit)}, k\u00a0=\u00a0${written.k}`;
   if (typeof written === 'object' && 'tolerance' in written)
     return `tolerance ±${withUnit(written.tolerance, 0, unit)}, ${written.distribution}`;
-  return `u = ${withUnit(declaration.u, 0, unit)}`;
+  return `u\u00a0=\u00a0${withUnit(declaration.u, 0, unit)}`;
 }
 
 function withUnit(value: number, decimals: number, unit: string): string {

@@ -1,6 +1,6 @@
 import type { Choice, Declaration, QuantityFile, SheetFile } from '../../../core/index.ts';
 import { getAtPath, type KeyPath, setAtPath } from '../../state/setAtPath.ts';
-import { declarationWords } from './declarationWords.ts';
+import { declarationWords, type QuantityWords } from './declarationWords.ts';
 import type { Option, SentenceField } from './sentence.ts';
 
 interface Naming {
@@ -15,7 +15,7 @@ export function quantityField(
   file: SheetFile,
   naming: Naming,
   declaration: Declaration,
-  words: { readonly unit: string; readonly decimals: number; readonly whenZero?: string; readonly behind?: string },
+  words: QuantityWords,
 ): SentenceField {
   const { path, ...rest } = naming;
   return {

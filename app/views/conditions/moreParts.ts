@@ -22,7 +22,7 @@ export function moreParts(file: SheetFile, sheet: Sheet): SentencePart[] {
         unit: 'M',
         decimals: 4,
         whenZero: 'no carbonate',
-        behind: 'carbonate',
+        noun: 'carbonate',
       },
     ),
     ...(hasSubstances ? [' and, beyond its counter-ions, ', strongIonField(file, sheet)] : []),
@@ -38,7 +38,7 @@ export function moreParts(file: SheetFile, sheet: Sheet): SentencePart[] {
       file,
       { id: 'titrant.background', label: 'background electrolyte in the titrant', path: ['titrant', 'background_M'] },
       titrant.background,
-      { unit: 'M', decimals: 2, whenZero: 'no background electrolyte', behind: 'background electrolyte' },
+      { unit: 'M', decimals: 2, whenZero: 'no background electrolyte', noun: 'background electrolyte' },
     ),
     ' and ',
     quantityField(
@@ -57,16 +57,16 @@ export function moreParts(file: SheetFile, sheet: Sheet): SentencePart[] {
       file,
       { id: 'burette.gain', label: 'burette gain, true over shown volume', path: ['burette', 'gain'] },
       burette.gain,
-      { unit: '', decimals: 0, behind: 'times what it shows' },
+      { unit: '', decimals: 0, behind: '× the volume it shows' },
     ),
-    ', each volume is set with u = ',
+    ', each volume is set with u\u00a0=\u00a0',
     numberField(
       { id: 'burette.setting', label: 'uncertainty of a set volume', path: ['burette', 'uSetting_mL'] },
       burette.settingUncertainty,
       `${formatDeclared(burette.settingUncertainty.value, 0)}\u00a0mL`,
       'mL',
     ),
-    ' and each dose adds u = ',
+    ' and each dose adds u\u00a0=\u00a0',
     numberField(
       {
         id: 'burette.dose',
@@ -83,7 +83,7 @@ export function moreParts(file: SheetFile, sheet: Sheet): SentencePart[] {
       file,
       { id: 'reading.slope', label: 'electrode slope, 1 being ideal', path: ['reading', 'slope'] },
       reading.slope,
-      { unit: '', decimals: 0, behind: 'of the ideal' },
+      { unit: '', decimals: 0, behind: '× the ideal' },
     ),
     '; the uncertainty of one reading is ',
     numberField(

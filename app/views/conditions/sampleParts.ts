@@ -31,7 +31,7 @@ export function sampleParts(file: SheetFile, sheet: Sheet): SentencePart[] {
         hint: 'An inert salt of singly charged ions, such as KCl; it sets the ionic strength.',
       },
       sample.background,
-      { unit: 'M', decimals: 2, whenZero: 'no background electrolyte', behind: 'background electrolyte' },
+      { unit: 'M', decimals: 2, whenZero: 'no background electrolyte', noun: 'background electrolyte' },
     ),
   ];
 }

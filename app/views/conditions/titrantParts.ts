@@ -27,7 +27,7 @@ export function titrantParts(file: SheetFile, sheet: Sheet): SentencePart[] {
     file,
     { id: 'titrant.carbonate', label: 'carbonate in the titrant', path: ['titrant', 'carbonate_M'] },
     titrant.carbonate,
-    { unit: 'M', decimals: 4, whenZero: 'no carbonate', behind: 'carbonate' },
+    { unit: 'M', decimals: 4, whenZero: 'no carbonate', noun: 'carbonate' },
   );
   if (titrant.kind.value === 'solution' || titrant.concentration === null) return solutionParts(file, sheet);
   const carries = titrant.carbonate.state !== 'fixed' || titrant.carbonate.value !== 0;
@@ -78,7 +78,7 @@ function solutionParts(file: SheetFile, { titrant }: Sheet): SentencePart[] {
         file,
         { id: `titrant.${ion}`, label: `strong ${ion} in the titrant`, path: ['titrant', `${ion}_M`] },
         declaration,
-        { unit: 'M', decimals: 4, whenZero: `no strong ${ion}`, behind: `strong ${ion}` },
+        { unit: 'M', decimals: 4, whenZero: `no strong ${ion}`, noun: `strong ${ion}` },
       ),
       ', ',
     ];
@@ -100,7 +100,7 @@ function solutionParts(file: SheetFile, { titrant }: Sheet): SentencePart[] {
       file,
       { id: 'titrant.carbonate', label: 'carbonate in the titrant', path: ['titrant', 'carbonate_M'] },
       titrant.carbonate,
-      { unit: 'M', decimals: 4, whenZero: 'no carbonate', behind: 'carbonate' },
+      { unit: 'M', decimals: 4, whenZero: 'no carbonate', noun: 'carbonate' },
     ),
     ...systems,
   ];

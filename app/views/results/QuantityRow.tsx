@@ -4,6 +4,7 @@ import { IntervalBar } from '../../widgets/IntervalBar.tsx';
 import { constantWords } from './constantWords.ts';
 import type { IntervalScale } from './intervalScale.ts';
 import { intervalWords } from './intervalWords.ts';
+import { RestsOn } from './RestsOn.tsx';
 import { whyNoNumber } from './whyNoNumber.ts';
 
 interface Props {
@@ -12,8 +13,6 @@ interface Props {
   /** Labels of all quantities by id, for what this one rests on. */
   readonly labels: ReadonlyMap<string, string>;
 }
-
-const mostNamed = 3;
 
 /** One quantity with its uncertainty, its interval, what it is and what it rests on. */
 export function QuantityRow({ quantity, scale, labels }: Props) {
@@ -58,16 +57,10 @@ export function QuantityRow({ quantity, scale, labels }: Props) {
       {restsOn.length > 0 && (
         <tr className="remark-row">
           <td colSpan={5}>
-            rests on <span className="assumed-mark">assumed</span> {restsOnWords(restsOn, labels)}
+            <RestsOn names={restsOn.map((other) => labels.get(other) ?? other)} />
           </td>
         </tr>
       )}
     </>
   );
-}
-
-function restsOnWords(ids: readonly string[], labels: ReadonlyMap<string, string>): string {
-  const named = ids.slice(0, mostNamed).map((id) => labels.get(id) ?? id);
-  const left = ids.length - named.length;
-  return `${named.join(', ')}${left > 0 ? ` and ${left} more` : ''}`;
 }

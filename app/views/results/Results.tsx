@@ -24,30 +24,32 @@ export function Results({ result, declared }: Props) {
         {ending.message}
         {noise !== null && <span className="noise"> {noiseWords(noise)}</span>}
       </p>
-      {general.length > 0 && (
-        <div className="doubts">
-          <h2>{general.length === 1 ? 'A doubt' : `${general.length} doubts`}</h2>
-          {general.map((doubt) => (
-            <DoubtNote key={`${doubt.code} ${doubt.seen}`} doubt={doubt} />
-          ))}
-        </div>
-      )}
       <div className="result-block">
         <h2>Quantities</h2>
         <QuantityTable quantities={quantities} doubts={ofQuantities} declared={declared} />
       </div>
-      {equivalence.length > 0 && (
-        <div className="result-block">
-          <h2>Equivalence volumes in mL</h2>
-          <EquivalenceTable results={equivalence} />
-        </div>
-      )}
-      {ladder !== null && (
-        <div className="result-block">
-          <h2>How many pKa values?</h2>
-          <p>{ladder.sentence}</p>
-        </div>
-      )}
+      <div className="results-aside">
+        {general.length > 0 && (
+          <div className="doubts">
+            <h2>{general.length === 1 ? 'A doubt' : `${general.length} doubts`}</h2>
+            {general.map((doubt) => (
+              <DoubtNote key={`${doubt.code} ${doubt.seen}`} doubt={doubt} />
+            ))}
+          </div>
+        )}
+        {equivalence.length > 0 && (
+          <div className="result-block">
+            <h2>Equivalence volumes in mL</h2>
+            <EquivalenceTable results={equivalence} />
+          </div>
+        )}
+        {ladder !== null && (
+          <div className="result-block">
+            <h2>How many pKa values?</h2>
+            <p>{ladder.sentence}</p>
+          </div>
+        )}
+      </div>
     </section>
   );
 }
