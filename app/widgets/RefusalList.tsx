@@ -40,9 +40,9 @@ function placeWords({ first, lines, count }: RefusalGroup, namesFile: boolean): 
   if (count > 1 && lines.length > 0) {
     const listed = lines.slice(0, mostLines).join(', ');
     const others = lines.length > mostLines ? ` and ${lines.length - mostLines} more` : '';
-    return `${[...where, `lines ${listed}${others}`].join(', ')}; the first:`;
+    return `${[...where, `${where.length > 0 ? 'lines' : 'Lines'} ${listed}${others}`].join(', ')}; the first:`;
   }
-  if (lines.length > 0) where.push(`line ${lines[0]}`);
+  if (lines.length > 0) where.push(`${where.length > 0 ? 'line' : 'Line'} ${lines[0]}`);
   if (column !== undefined) where.push(`column ${column}`);
   return where.length === 0 ? '' : `${where.join(', ')}:`;
 }

@@ -56,5 +56,5 @@ function read(
   const isOpen = text.trim() === '' && editor.openWords !== null;
   const value = isOpen ? undefined : parseEntry(text);
   const edit: SheetEdit = (file) => editor.set(file, value ?? undefined);
-  return { edit, problem: value === null ? 'Here may stand a number such as 25.0 or 25,0.' : check(edit) };
+  return { edit, problem: value === null ? 'Here belongs a number such as 25.0 or 25,0.' : check(edit) };
 }

@@ -12,9 +12,9 @@ export function whatIsWrong(file: SheetFile, run: Run, last: Sheet | null): stri
   const parsed = parseSheet(JSON.stringify(file), 'The sheet');
   if (!parsed.ok) {
     const { message, remedy } = parsed.refusals[0];
-    // The remedy names the key of the sheet, which the person does not see.
-    const mayStand = /^Give (.*) for "[^"]*"\.$/.exec(remedy)?.[1];
-    return mayStand === undefined ? `${message} ${remedy}` : `Here may stand ${mayStand}.`;
+    // The message names the key of the sheet, which the person does not see.
+    const belongs = /, where (.*) belongs\.$/.exec(message)?.[1];
+    return belongs === undefined ? `${message} ${remedy}` : `Here belongs ${belongs}.`;
   }
   const completed = completeSheet(parsed.value, sheetFacts(run, last));
   if (completed.ok) return null;
