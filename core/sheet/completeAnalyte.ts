@@ -20,7 +20,10 @@ export function completeAnalyte(file: AnalyteFile, facts: RunFacts, explicitIons
   const chargeIfOpen = asAcid ? assumptions.chargeFullyProtonatedOfAcid : groups;
   const lostIfOpen = asAcid ? 0 : groups;
   return {
-    name: file.name === undefined ? { value: 'analyte', assumed: true } : { value: file.name, assumed: false },
+    name:
+      file.name === undefined || file.name.trim() === ''
+        ? { value: 'analyte', assumed: true }
+        : { value: file.name, assumed: false },
     groups: { value: groups, assumed: declaredGroups === undefined },
     chargeFullyProtonated: {
       value: file.chargeFullyProtonated ?? chargeIfOpen,

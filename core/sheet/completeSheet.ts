@@ -42,7 +42,7 @@ function completeVessel(file: VesselFile, inFull: boolean): Vessel {
 
 /** Fills in what a sheet leaves out; every value filled in is marked as assumed. */
 export function completeSheet(file: SheetFile, facts: RunFacts): Outcome<Sheet> {
-  const refusals: readonly Refusal[] = sheetInconsistencies(file);
+  const refusals: readonly Refusal[] = sheetInconsistencies(file, facts);
   if (refusals.length > 0) return { ok: false, refusals };
 
   const sample = file.sample ?? {};

@@ -1,12 +1,13 @@
 import type { Refusal } from '../notice/refusal.ts';
+import type { RunFacts } from './runFacts.ts';
 import type { AnalyteFile, SheetFile } from './sheetFile.ts';
 
 function named(key: string, substance: AnalyteFile): AnalyteFile & { key: string } {
   return { key, ...substance };
 }
 
-/** Keys of a sheet that are each in order but contradict one another. */
-export function sheetInconsistencies(file: SheetFile): readonly Refusal[] {
+/** Keys of a sheet that are each in order but contradict one another, or the run. */
+export function sheetInconsistencies(file: SheetFile, facts: RunFacts): readonly Refusal[] {
   const refusals: Refusal[] = [];
   const refuse = (key: string, message: string, remedy: string) =>
     refusals.push({ code: 'sheet-inconsistent', message, remedy, place: { key } });
@@ -56,13 +57,14 @@ export function sheetInconsistencies(file: SheetFile): readonly Refusal[] {
     );
 
   const reading = file.reading ?? {};
-  if (reading.kind === 'mV' && reading.offset !== undefined)
+  const readingKind = reading.kind ?? facts.readingKind;
+  if (readingKind === 'mV' && reading.offset !== undefined)
     refuse(
       'reading.offset',
       'Readings in mV have E0_mV and slope, not an offset in pH.',
-      'Give E0_mV in place of offset.',
+      'Give E0_mV in place of offset, or set the kind of the reading to "pH".',
     );
-  if (reading.kind === 'pH' && reading.E0_mV !== undefined)
+  if (readingKind === 'pH' && reading.E0_mV !== undefined)
     refuse(
       'reading.E0_mV',
       'Readings in pH have offset and slope, not a standard potential.',
