@@ -13,7 +13,7 @@ import { parseArguments } from './parseArguments.ts';
 import { resultDocument } from './resultDocument.ts';
 import { resultText } from './resultText.ts';
 
-/** Exit statuses that scripts rely on. */
+/** Exit statuses that scripts rely on. A row that is not accepted counts: it stands among the refusals. */
 const allFitted = 0;
 const somethingFailed = 1;
 const callWasWrong = 2;
@@ -35,8 +35,9 @@ function main(): number {
     ? `${JSON.stringify(resultDocument(results, refusals), null, 2)}\n`
     : resultText(results, refusals);
   process.stdout.write(output);
+  const allAccepted = refusals.length === 0 && results.every(({ run }) => run.notAccepted.length === 0);
   const succeeded = results.every(({ ending }) => ending.code === 'fitted' || ending.code === 'predicted');
-  return refusals.length === 0 && succeeded ? allFitted : somethingFailed;
+  return allAccepted && succeeded ? allFitted : somethingFailed;
 }
 
 type ReadSheet = { ok: true; value: SheetFile } | { ok: false; refusals: readonly Refusal[] };

@@ -1,0 +1,202 @@
+import { describe, expect, it } from 'vitest';
+import type { DoubtCode } from '../../../../core/notice/doubt.ts';
+import type { RunResult } from '../../../../core/results/runResult.ts';
+import {
+  type Experiment,
+  perform,
+  runOf,
+  sheetOf,
+  usualErrors,
+  workUp,
+  workUpExperiment,
+} from '../../../experiment.ts';
+
+const errors = { seed: 11, ...usualErrors };
+/** A well-behaved acid of one group with a step at 2.5 mL. */
+const acid: Experiment = { pKa: [4.8], end_mL: 3.6, errors };
+const diprotic: Experiment = { pKa: [3.5, 7.5], end_mL: 6.5, errors };
+
+function doubtsOf(result: RunResult, code: DoubtCode) {
+  expect(result.ending.code).toBe('fitted');
+  return result.doubts.filter((doubt) => doubt.code === code);
+}
+
+describe('a sound run', () => {
+  it.each([
+    ['an acid of one group', acid],
+    ['an acid of two', diprotic],
+    ['an ampholyte weighed as its hydrochloride', { ...diprotic, pKa: [4, 9], chargeFullyProtonated: 1 }],
+    ['a base with an acid', { ...acid, pKa: [9], chargeFullyProtonated: 1, protonsLostAsWeighed: 1, titrant: 'acid' }],
+    ['a strong acid', { ...acid, pKa: [] }],
+    ['a strong base with an acid', { ...acid, pKa: [], titrant: 'acid' }],
+  ] as const satisfies readonly (readonly [string, Experiment])[])('of %s raises no doubt', (_, experiment) => {
+    const result = workUpExperiment(experiment);
+    expect(result.ending.code).toBe('fitted');
+    expect(result.doubts).toEqual([]);
+  });
+
+  it('raises at most a chance doubt over many seeds', () => {
+    const doubts = Array.from({ length: 24 }, (_, seed) =>
+      workUpExperiment({ ...diprotic, errors: { ...errors, seed } }).doubts.map(({ code }) => code),
+    ).flat();
+    // Checks are set at three joint standard uncertainties and at 3.5 standard deviations of the runs test: of 24
+    // runs with about six comparisons each, 0.4 are expected of chance; four would be a one in 1000 event.
+    expect(doubts.length, doubts.join(', ')).toBeLessThan(4);
+  });
+});
+
+describe('every doubt', () => {
+  it('says what was seen, what it means and what to do, in figures that exist', () => {
+    const { volumes_mL, readings } = perform(acid);
+    for (const { seen, means, remedy } of workUp(runOf(volumes_mL, readings), { sheet: 1 }).doubts)
+      for (const text of [seen, means, remedy]) {
+        expect(text).toMatch(/^\S.*\.$/);
+        expect(text).not.toMatch(/NaN|Infinity|undefined|null/);
+      }
+  });
+});
+
+describe('unidentifiable', () => {
+  it('names the quantities of which only the ratio shows', () => {
+    const [doubt, ...more] = doubtsOf(
+      workUpExperiment(acid, { sample: { volume_mL: { fitted: true, start: 25 } }, burette: { gain: 'fitted' } }),
+      'unidentifiable',
+    );
+    expect(more).toEqual([]);
+    expect(doubt.seen).toContain('sample.volume');
+    expect(doubt.seen).toContain('burette.gain');
+    // The constant and the concentration do not take part: everything scales alike.
+    expect(doubt.seen).not.toContain('pKa1');
+    expect(doubt.seen).not.toContain('concentration');
+  });
+
+  it('gives no value for them, and still one for the rest', () => {
+    const { quantities } = workUpExperiment(acid, {
+      sample: { volume_mL: { fitted: true, start: 25 } },
+      burette: { gain: 'fitted' },
+    });
+    const find = (id: string) => quantities.find((quantity) => quantity.id === id);
+    for (const id of ['sample.volume', 'burette.gain'])
+      expect(find(id)).toMatchObject({ value: null, u: null, interval95: null, whyNoU: 'undetermined' });
+    // Three standard uncertainties.
+    expect(Math.abs((find('pKa1')?.value ?? 0) - 4.8)).toBeLessThan(3 * (find('pKa1')?.u ?? 0));
+  });
+});
+
+describe('residualsWander', () => {
+  it('sees carbonate that the sheet denies', () => {
+    const result = workUpExperiment({ ...acid, titrantCarbonate_M: 0.004 }, { titrant: { carbonate_M: 0 } });
+    expect(doubtsOf(result, 'residuals-wander')).toHaveLength(1);
+  });
+
+  it('is silent with fewer points than the test needs', () => {
+    const result = workUpExperiment(
+      { ...acid, points: 11, titrantCarbonate_M: 0.004 },
+      { titrant: { carbonate_M: 0 } },
+    );
+    expect(doubtsOf(result, 'residuals-wander')).toEqual([]);
+  });
+});
+
+describe('volumesDisagree', () => {
+  it('sees a step that the model does not have', () => {
+    const { volumes_mL, readings } = perform(diprotic);
+    const sheet = sheetOf({ ...diprotic, pKa: [5] });
+    const doubts = doubtsOf(workUp(runOf(volumes_mL, readings), sheet), 'volumes-disagree');
+    expect(doubts.length).toBeGreaterThan(0);
+    // The volumes lie at 2.5 and 5 mL, where the figure shows them.
+    for (const { place } of doubts) expect(place.volume_mL).toBeGreaterThan(2);
+  });
+});
+
+describe('noiseFarAboveUsual', () => {
+  it('sees residuals of twice the declared noise', () => {
+    const noisy = { ...acid, errors: { seed: 3, uReading: 0.012, uSetting_mL: 0.0072 } };
+    const [doubt] = doubtsOf(workUpExperiment(noisy), 'noise-far-above-usual');
+    expect(doubt.seen).toContain('declared');
+  });
+
+  it('sees undeclared noise that no instrument makes', () => {
+    const noisy = { ...acid, errors: { seed: 3, uReading: 0.08, uSetting_mL: 0.003 } };
+    const { volumes_mL, readings } = perform(noisy);
+    const { u: _, ...reading } = sheetOf(acid).reading ?? {};
+    const [doubt] = doubtsOf(
+      workUp(runOf(volumes_mL, readings), { ...sheetOf(acid), reading }),
+      'noise-far-above-usual',
+    );
+    expect(doubt.seen).toContain('in pH');
+  });
+});
+
+describe('beyondReach', () => {
+  it('sees a constant above the last reading', () => {
+    const [doubt, ...more] = doubtsOf(workUpExperiment({ ...diprotic, pKa: [4, 12], end_mL: 5 }), 'beyond-reach');
+    expect(more).toEqual([]);
+    expect(doubt.place.quantity).toBe('pKa2');
+  });
+
+  it('lets a declared constant lie where it will', () => {
+    const result = workUpExperiment(
+      { ...diprotic, pKa: [4, 12], end_mL: 5 },
+      { sample: { analytes: [{ groups: 2, chargeFullyProtonated: 0, protonsLostAsWeighed: 0, pKa: ['fitted', 12] }] } },
+    );
+    expect(doubtsOf(result, 'beyond-reach')).toEqual([]);
+  });
+});
+
+describe('concentrationOfNothing', () => {
+  it('sees a fitted carbonate that is not there', () => {
+    const [doubt] = doubtsOf(
+      workUpExperiment(acid, { titrant: { carbonate_M: 'fitted' } }),
+      'concentration-of-nothing',
+    );
+    expect(doubt.place.quantity).toBe('titrant.carbonate');
+  });
+});
+
+describe('fewPoints', () => {
+  it('sees that hardly a degree of freedom is left', () => {
+    const [doubt] = doubtsOf(workUpExperiment({ ...diprotic, points: 10 }), 'too-few-points');
+    expect(doubt.seen).toContain('10 points');
+  });
+});
+
+describe('activityOutOfRange', () => {
+  const salty: Experiment = { ...acid, activity: 'davies', background_M: 0.8 };
+
+  it('sees an ionic strength beyond the Davies equation', () => {
+    expect(doubtsOf(workUpExperiment(salty), 'activity-out-of-range')).toHaveLength(1);
+  });
+
+  it('is silent below, and without an activity model', () => {
+    expect(doubtsOf(workUpExperiment({ ...salty, background_M: 0.3 }), 'activity-out-of-range')).toEqual([]);
+    expect(doubtsOf(workUpExperiment({ ...salty, activity: 'none' }), 'activity-out-of-range')).toEqual([]);
+  });
+});
+
+describe('temperatureOutOfRange', () => {
+  it('sees water beyond the range of its formulas', () => {
+    expect(
+      doubtsOf(workUpExperiment(acid, { medium: { temperature_C: 120 } }), 'temperature-out-of-range'),
+    ).toHaveLength(1);
+  });
+
+  it('asks nothing of another solvent', () => {
+    const medium = { temperature_C: 120, solvent: 'ethylene glycol' };
+    expect(doubtsOf(workUpExperiment(acid, { medium }), 'temperature-out-of-range')).toEqual([]);
+  });
+});
+
+describe('restsOnAssumption', () => {
+  it('names what nobody declared and what rests on it', () => {
+    const { concentration_M: _, ...titrant } = sheetOf(acid).titrant ?? {};
+    const { volumes_mL, readings } = perform(acid);
+    const result = workUp(runOf(volumes_mL, readings), { ...sheetOf(acid), titrant });
+    const doubts = doubtsOf(result, 'rests-on-assumption');
+    expect(doubts.some(({ seen }) => seen.includes('concentration') && seen.includes('titrant concentration'))).toBe(
+      true,
+    );
+    const concentration = result.quantities.find(({ id }) => id === 'concentration');
+    expect(concentration?.restsOn).toEqual(['titrant.concentration']);
+  });
+});
