@@ -86,13 +86,14 @@ function remedyOfNumber(key: string): string {
 }
 
 function remedyOfType(input: unknown, expected: string): string {
-  const number = typeof input === 'string' ? /^\s*([-+−]?\d+)(?:[.,](\d+))?(?:\s*\p{L}.*)?$/u.exec(input) : null;
+  const number = typeof input === 'string' ? /^\s*([-+−]?\d+)(?:[.,](\d+))?(?:\s*[\p{L}°].*)?$/u.exec(input) : null;
   if (number === null || !/^a (whole )?number/.test(expected)) return `Write ${expected} there.`;
   const plain = number[1].replace('−', '-').replace('+', '') + (number[2] === undefined ? '' : `.${number[2]}`);
   return `Write the number alone, without quotes: ${plain}.`;
 }
 
 function quote(input: unknown): string {
-  const text = JSON.stringify(input) ?? 'missing';
+  // JSON has no way to write a number beyond all doubles.
+  const text = typeof input === 'number' ? String(input) : (JSON.stringify(input) ?? 'missing');
   return text.length > longestQuote ? `${text.slice(0, longestQuote - 1)}…` : text;
 }
