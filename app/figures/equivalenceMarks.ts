@@ -27,7 +27,8 @@ export function equivalenceMarks(run: FigureRun): EquivalenceMarks {
 
 function marksBy(run: FigureRun, by: EquivalenceResult['by']): EquivalenceMark[] {
   const found = run.result.equivalence.filter((entry) => entry.by === by);
-  const severalAnalytes = new Set(found.map((entry) => entry.analyte)).size > 1;
+  // The steepest points of the readings know nothing of substances.
+  const severalAnalytes = by === 'fit' && new Set(found.map((entry) => entry.analyte)).size > 1;
   // One list, one number of decimals: that of its least certain volume.
   const decimals = volumeDecimals(Math.max(...found.map((entry) => entry.u ?? 0)));
   return found

@@ -6,7 +6,6 @@ export interface FigureStyle {
   readonly rule: string;
   readonly ruleStrong: string;
   readonly accent: string;
-  readonly accentWash: string;
   /** One for each form of a proton system and more; neighbours differ in lightness as well as in hue. */
   readonly forms: readonly string[];
   /** Families in order of preference, as CSS has them. */

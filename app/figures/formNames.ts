@@ -14,6 +14,8 @@ import { textWidth } from './textWidth.ts';
 const STEP = 6;
 /** What it costs to stand at half the curve's largest share instead of at the largest. */
 const COST_OF_HALF = 30;
+/** What it costs to stand on a curve or a rule. */
+const COST_OF_LINE = 12;
 /** A form that never reaches this share in view lies on the axis and stays without a name. */
 const VISIBLE = 0.02;
 /** Below this share of its own maximum a curve no longer carries its name. */
@@ -56,7 +58,7 @@ export function formNames(
     order.map((k) => requests[k]),
     bounds,
     constants.taken,
-    [...lines, ...constants.lines],
+    [...lines, ...constants.lines].map((line) => ({ line, cost: COST_OF_LINE })),
   );
   places.forEach((place, index) => {
     if (place === null) return;

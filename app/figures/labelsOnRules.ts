@@ -12,6 +12,9 @@ import { textWidth } from './textWidth.ts';
 
 /** Places tried along a rule. */
 const PLACES = 13;
+/** What it costs to hide part of the curve, or of a rule; the far end of its own rule costs nothing. */
+const COST_OF_CURVE = 60;
+const COST_OF_RULE = 12;
 
 /** Labels at either end of the rules inside the curve's panel, where the curve leaves room. */
 export function labelsOnRules(frame: FigureFrame, marks: readonly ConstantMark[], style: FigureStyle): Decoration {
@@ -36,7 +39,15 @@ export function labelsOnRules(frame: FigureFrame, marks: readonly ConstantMark[]
       }),
     };
   });
-  const found = placeLabels(requests, curve, [], [pointLine(frame), ...equivalenceLines(frame)]);
+  const found = placeLabels(
+    requests,
+    curve,
+    [],
+    [
+      { line: pointLine(frame), cost: COST_OF_CURVE },
+      ...equivalenceLines(frame).map((line) => ({ line, cost: COST_OF_RULE })),
+    ],
+  );
   const annotations: FigureAnnotation[] = [];
   found.forEach((place, k) => {
     if (place === null) return;

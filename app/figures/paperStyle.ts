@@ -8,7 +8,6 @@ export const paperStyle: FigureStyle = {
   rule: '#d8d5cb',
   ruleStrong: '#8d9092',
   accent: '#17565f',
-  accentWash: '#e4eeee',
   forms: ['#6e2f0e', '#a8631a', '#3d777f', '#16395c', '#8a5a94', '#4a6b1f', '#7a1f4b', '#50565c'],
   fontFamily: 'Palatino, "Noto Serif", "Liberation Serif", Georgia, "Times New Roman", serif',
 };

@@ -10,8 +10,12 @@ export interface LabelRequest {
   readonly candidates: readonly { readonly left: number; readonly top: number; readonly cost: number }[];
 }
 
-/** What a line through a label costs, on the scale of the candidates' own costs. */
-const LINE_COST = 12;
+/** A line that labels should not stand on, and what it costs to do so, on the scale of the candidates' own costs. */
+export interface LineToAvoid {
+  readonly line: PixelLine;
+  readonly cost: number;
+}
+
 /** Free room kept around each label, px. */
 const MARGIN = 2;
 
@@ -26,17 +30,17 @@ export function placeLabels(
   requests: readonly LabelRequest[],
   bounds: Rectangle,
   obstacles: readonly Rectangle[],
-  lines: readonly PixelLine[],
+  lines: readonly LineToAvoid[],
 ): (Rectangle | null)[] {
   const taken = [...obstacles];
   return requests.map(({ width, height, candidates }) => {
     let best: Rectangle | null = null;
     let bestCost = Number.POSITIVE_INFINITY;
-    for (const { left, top, cost } of candidates) {
-      if (cost >= bestCost) continue;
+    for (const { left, top, cost } of candidates.toSorted((a, b) => a.cost - b.cost)) {
+      if (cost >= bestCost) break;
       const box = { left, top, width, height };
       if (!liesWithin(box, bounds) || taken.some((other) => overlap(box, other))) continue;
-      const total = cost + LINE_COST * lines.filter((line) => crosses(line, box)).length;
+      const total = lines.reduce((sum, other) => (crosses(other.line, box) ? sum + other.cost : sum), cost);
       if (total < bestCost) {
         bestCost = total;
         best = box;
@@ -66,8 +70,14 @@ function overlap(a: Rectangle, b: Rectangle): boolean {
 }
 
 function crosses(line: PixelLine, box: Rectangle): boolean {
+  const right = box.left + box.width;
+  const bottom = box.top + box.height;
   for (let i = 0; i + 3 < line.length; i += 2) {
-    if (segmentMeets(line[i], line[i + 1], line[i + 2], line[i + 3], box)) return true;
+    const [x0, y0, x1, y1] = [line[i], line[i + 1], line[i + 2], line[i + 3]];
+    // Most segments lie to one side of the box altogether.
+    if ((x0 < box.left && x1 < box.left) || (x0 > right && x1 > right)) continue;
+    if ((y0 < box.top && y1 < box.top) || (y0 > bottom && y1 > bottom)) continue;
+    if (segmentMeets(x0, y0, x1, y1, box)) return true;
   }
   return false;
 }

@@ -5,6 +5,9 @@ import type { FigureStyle } from './figureStyle.ts';
 import { markerSize } from './markerSize.ts';
 import { bandWidth } from './residualRange.ts';
 
+/** Opacity of the band as two hexadecimal digits: 12 %. */
+const BAND_ALPHA = '1f';
+
 type FigureMarker = NonNullable<FigureTrace['marker']>;
 
 /** A point with a residual, and the height at which it is drawn. */
@@ -79,7 +82,8 @@ function bandTrace(drawn: readonly PointResult[], style: FigureStyle): FigureTra
       xaxis: 'x',
       yaxis: 'y2',
       fill: 'toself',
-      fillcolor: style.accentWash,
+      // Seen through, so that rules and zero line go on below it.
+      fillcolor: `${style.accent}${BAND_ALPHA}`,
       line: { width: 0 },
     },
   ];

@@ -51,7 +51,6 @@ function readFigureStyle(element: HTMLElement): FigureStyle {
     rule: colour('--rule', paperStyle.rule),
     ruleStrong: colour('--rule-strong', paperStyle.ruleStrong),
     accent: colour('--accent', paperStyle.accent),
-    accentWash: colour('--accent-wash', paperStyle.accentWash),
     forms: paperStyle.forms.map((fallback, index) => colour(`--form-${index + 1}`, fallback)),
     fontFamily: getComputedStyle(element).fontFamily,
   };
