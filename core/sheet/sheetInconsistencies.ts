@@ -6,6 +6,10 @@ function named(key: string, substance: AnalyteFile): AnalyteFile & { key: string
   return { key, ...substance };
 }
 
+function counted(count: number, noun: string): string {
+  return `${count} ${noun}${count === 1 ? '' : 's'}`;
+}
+
 /** Keys of a sheet that are each in order but contradict one another, or the run. */
 export function sheetInconsistencies(file: SheetFile, facts: RunFacts): readonly Refusal[] {
   const refusals: Refusal[] = [];
@@ -22,21 +26,21 @@ export function sheetInconsistencies(file: SheetFile, facts: RunFacts): readonly
     if (substance.groups !== undefined && substance.pKa !== undefined && substance.pKa.length !== substance.groups)
       refuse(
         `${substance.key}.pKa`,
-        `${substance.groups} ionisable groups are declared, but ${substance.pKa.length} constants.`,
+        `Declared are ${counted(substance.groups, 'ionisable group')}, but ${counted(substance.pKa.length, 'constant')}.`,
         'Give one entry of pKa for every group, "fitted" where it is to be found, or leave pKa out.',
       );
     const lost = substance.protonsLostAsWeighed;
     if (lost !== undefined && groups !== undefined && lost > groups)
       refuse(
         `${substance.key}.protonsLostAsWeighed`,
-        `A substance with ${groups} ionisable groups cannot have lost ${lost} protons.`,
+        `A substance with ${counted(groups, 'ionisable group')} cannot have lost ${counted(lost, 'proton')}.`,
         `Give a number from 0 to ${groups}.`,
       );
     const counterIon = substance.counterIon;
     if (counterIon !== undefined && counterIon.protonsLostAsWeighed > counterIon.pKa.length)
       refuse(
         `${substance.key}.counterIon.protonsLostAsWeighed`,
-        `A counter-ion with ${counterIon.pKa.length} constants cannot have lost ${counterIon.protonsLostAsWeighed} protons.`,
+        `A counter-ion with ${counted(counterIon.pKa.length, 'constant')} cannot have lost ${counted(counterIon.protonsLostAsWeighed, 'proton')}.`,
         `Give a number from 0 to ${counterIon.pKa.length}.`,
       );
   }
