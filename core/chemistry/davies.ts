@@ -2,7 +2,7 @@
  * Coefficient of the linear term, as in the later form of the equation.
  * Source: Davies, C. W., Ion Association, Butterworths 1962, p. 41.
  */
-export const daviesLinearCoefficient = 0.3;
+const daviesLinearCoefficient = 0.3;
 
 /** Ionic strength in mol/L up to which the equation is commonly trusted (common practice). */
 export const daviesUpperIonicStrength = 0.5;
