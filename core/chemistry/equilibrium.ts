@@ -5,6 +5,9 @@ import type { ProtonSystemShape } from './protonSystem.ts';
 
 /** Stop when ln[H⁺] and ln I move by less than this: Newton is quadratic, so the error left is about its square. */
 const stepTolerance = 1e-7;
+/** Steps below this shrink quadratically, which two of them then show; the error that they leave may be this large. */
+const quadraticRange = 0.1;
+const errorTolerance = 1e-11;
 /** Below this a step that no longer shrinks is rounding, not progress. */
 const roundingStep = 1e-5;
 const joinedIterations = 24;
@@ -85,7 +88,9 @@ export class Equilibrium {
         ionic = Math.max(next, 0.1 * before);
         size = Math.max(size, Math.abs(ionic - before) / ionic);
       } else ionic = balance.ionic;
-      if (size < stepTolerance || (size < roundingStep && size >= previous)) {
+      // Quadratic convergence: the next step would be about size · (size / previous)².
+      const settled = previous < quadraticRange && size * (size / previous) ** 2 < errorTolerance;
+      if (size < stepTolerance || settled || (size < roundingStep && size >= previous)) {
         this.logHydrogen = x;
         this.ionicStrength = ionic;
         return true;

@@ -163,8 +163,9 @@ function openAmounts(
   if (unknown.length === 1) {
     const [analyte] = unknown;
     const others = open.reduce((sum, o, a) => (o === analyte ? sum : sum + capacity(o) * given[a]), 0);
-    for (const protons of atSteps)
-      for (let k = 1; k <= capacity(analyte); k++) {
+    // A single step is more often the last of several groups than the first.
+    for (const protons of [...atSteps].reverse())
+      for (let k = capacity(analyte); k >= 1; k--) {
         push([Math.abs(protons) / k]);
         if (others > 0) push([(Math.abs(protons) - others) / k]);
       }
