@@ -1,4 +1,4 @@
-import { parseSheet, type Refusal, type SheetFile, sheetVersion } from '../../core/index.ts';
+import { completeSheet, parseSheet, type Refusal, type SheetFile, sheetVersion } from '../../core/index.ts';
 import type { AnalysisClient } from '../worker/analysisClient.ts';
 import { changeShownRun } from './changeShownRun.ts';
 import { decidedRun } from './decidedRun.ts';
@@ -59,8 +59,12 @@ export function createDesk(client: Pick<AnalysisClient, 'read' | 'analyse'>): De
       const bytes = await bytesOf(file);
       const parsed = bytes === null ? null : parseSheet(new TextDecoder().decode(bytes), file.name);
       if (parsed === null) refusals.push(unreadable(file.name, 'The browser could not read it.'));
-      else if (parsed.ok) sheets.push({ name: file.name, sheet: parsed.value });
-      else refusals.push(...parsed.refusals);
+      else if (!parsed.ok) refusals.push(...parsed.refusals);
+      else {
+        const contradictions = contradictionsIn(parsed.value, file.name);
+        if (contradictions.length === 0) sheets.push({ name: file.name, sheet: parsed.value });
+        else refusals.push(...contradictions);
+      }
     }
     for (const file of exports) {
       const bytes = await bytesOf(file);
@@ -118,6 +122,12 @@ function sheetFor(name: string, sheets: readonly { readonly name: string; readon
   const stem = name.replace(/\.\w+$/, '');
   const own = sheets.find((sheet) => sheet.name === `${stem}.sheet.json` || sheet.name === `${stem}.json`);
   return own?.sheet ?? (sheets.length === 1 ? sheets[0].sheet : emptySheet);
+}
+
+/** What in a sheet contradicts itself; that does not depend on the run. */
+function contradictionsIn(sheet: SheetFile, file: string): readonly Refusal[] {
+  const completed = completeSheet(sheet, { readingKind: 'pH', titrantKind: 'base', groupsIfOpen: 1 });
+  return completed.ok ? [] : completed.refusals.map((refusal) => ({ ...refusal, place: { ...refusal.place, file } }));
 }
 
 async function bytesOf(file: HandedFile): Promise<Uint8Array | null> {

@@ -13,14 +13,20 @@ export type ReadReply = Exclude<Reply, { kind: 'progress' | 'analysed' }>;
 export type AnalysisReply = Exclude<Reply, { kind: 'progress' | 'read' }>;
 
 interface Job {
+  readonly request: Request;
   readonly settle: (reply: Reply) => void;
   readonly report: (progress: Progress) => void;
 }
 
-/**
- * Far longer than any stretch of work between two signs of life; only an endless loop or a lost worker takes longer.
- */
-const silenceLimit_ms = 20_000;
+/** How long the worker may take, in milliseconds. */
+export interface Patience {
+  /** Between two signs of life; only an endless loop or a lost worker takes longer. */
+  readonly silence: number;
+  /** To end work that it was told to stop; a worker in the middle of a long step is ended instead. */
+  readonly stop: number;
+}
+
+const usualPatience: Patience = { silence: 60_000, stop: 400 };
 
 /**
  * The page's side of the worker: one worker, started when first needed, ended and started anew where it stays silent.
@@ -28,15 +34,15 @@ const silenceLimit_ms = 20_000;
  */
 export class AnalysisClient {
   private readonly start: () => WorkerLike;
-  private readonly silenceLimit: number;
+  private readonly patience: Patience;
   private worker: WorkerLike | null = null;
   private jobs = new Map<number, Job>();
   private lastJob = 0;
   private watchdog: ReturnType<typeof setTimeout> | undefined;
 
-  constructor(start: () => WorkerLike, silenceLimit = silenceLimit_ms) {
+  constructor(start: () => WorkerLike, patience = usualPatience) {
     this.start = start;
-    this.silenceLimit = silenceLimit;
+    this.patience = patience;
   }
 
   /** Reads a file into runs. */
@@ -44,7 +50,7 @@ export class AnalysisClient {
     return this.ask((job) => ({ kind: 'read', job, name, bytes }), ignore).answer as Promise<ReadReply>;
   }
 
-  /** Works a run up; `stop` ends it at its next pause. */
+  /** Works a run up; `stop` ends it at its next pause, or with its worker where that is long in coming. */
   analyse(
     run: Run,
     sheet: SheetFile,
@@ -52,16 +58,19 @@ export class AnalysisClient {
   ): { readonly answer: Promise<AnalysisReply>; readonly stop: () => void } {
     const { job, answer } = this.ask((number) => ({ kind: 'analyse', job: number, run, sheet }), report);
     const stop = () => {
-      if (this.jobs.has(job)) this.worker?.postMessage({ kind: 'stop', job });
+      if (!this.jobs.has(job)) return;
+      this.worker?.postMessage({ kind: 'stop', job });
+      setTimeout(() => this.stopWithWorker(job), this.patience.stop);
     };
     return { answer: answer as Promise<AnalysisReply>, stop };
   }
 
   private ask(request: (job: number) => Request, report: (progress: Progress) => void) {
     const job = ++this.lastJob;
-    const answer = new Promise<Reply>((settle) => this.jobs.set(job, { settle, report }));
+    const asked = request(job);
+    const answer = new Promise<Reply>((settle) => this.jobs.set(job, { request: asked, settle, report }));
     this.worker ??= this.connect();
-    this.worker.postMessage(request(job));
+    this.worker.postMessage(asked);
     this.watch();
     return { job, answer };
   }
@@ -88,8 +97,20 @@ export class AnalysisClient {
     clearTimeout(this.watchdog);
     if (this.jobs.size === 0) return;
     this.watchdog = setTimeout(() => {
-      this.giveUp(`The calculation gave no sign of life for ${this.silenceLimit / 1000} s and was ended.`);
-    }, this.silenceLimit);
+      this.giveUp(`The calculation gave no sign of life for ${this.patience.silence / 1000} s and was ended.`);
+    }, this.patience.silence);
+  }
+
+  /** Ends the worker over a job that does not stop, and asks a new one for all that is still wanted. */
+  private stopWithWorker(job: number): void {
+    const stopped = this.jobs.get(job);
+    if (stopped === undefined) return;
+    this.jobs.delete(job);
+    this.worker?.terminate();
+    this.worker = this.jobs.size === 0 ? null : this.connect();
+    for (const { request } of this.jobs.values()) this.worker?.postMessage(request);
+    this.watch();
+    stopped.settle({ kind: 'stopped', job });
   }
 
   private giveUp(message: string): void {

@@ -20,6 +20,7 @@ const refused: readonly (readonly [string, GivenFile, RegExp])[] = [
   ['a sheet with a negative volume', sheet({ sheet: 1, sample: { volume_mL: -3 } }), /sample\.volume_mL.*-3/],
   ['a sheet with an unknown key', sheet({ sheet: 1, sample: { colour: 'red' } }), /sample\.colour/],
   ['a sheet that is not JSON', { name: 'conditions.json', content: '{ "sheet": 1,' }, /JSON/],
+  ['a sheet that contradicts itself', sheet({ sheet: 1, medium: { solvent: 'ethanol' } }), /ethanol/],
   ['a sheet of a newer version', sheet({ sheet: 99 }), /99/],
 ];
 

@@ -1,4 +1,4 @@
-import { useCallback, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import type { Desk } from '../../state/createDesk.ts';
 import { toggleRow } from '../../state/toggleRow.ts';
 import { useShownRun } from '../../state/useShownRun.ts';
@@ -20,6 +20,10 @@ export function Page({ desk }: { readonly desk: Desk }) {
   const [selectedLine, setSelectedLine] = useState<number | null>(null);
   const picker = useRef<HTMLInputElement>(null);
   useUndoKeys();
+  const title = shown === null ? 'Stepwell' : `${shown.run.name} – Stepwell`;
+  useEffect(() => {
+    document.title = title;
+  }, [title]);
   const openFiles = useCallback((files: readonly File[]) => void desk.open(files), [desk]);
   const choose = useCallback(() => picker.current?.click(), []);
 

@@ -79,7 +79,7 @@ export function QuantityTable({ quantities, doubts, declared: declarations }: Pr
                 aria-expanded={showsExact}
                 onClick={() => setShowsExact(!showsExact)}
               >
-                {showsExact ? 'Fewer: without' : 'All: with'} {exact.length} taken as exact
+                {showsExact ? 'Hide' : 'Show'} {exact.length} taken as exact
               </button>
             </th>
           </tr>

@@ -2,7 +2,7 @@ import type { ConstantResult } from '../../../core/index.ts';
 import { formatDecimals } from '../../widgets/formatQuantity.ts';
 
 const meaning: Readonly<Record<ConstantResult['kind'], string>> = {
-  thermodynamic: 'thermodynamic, at infinite dilution',
+  thermodynamic: 'thermodynamic (I = 0)',
   concentration: 'concentration constant',
   mixed: 'mixed constant',
 };
@@ -10,12 +10,12 @@ const meaning: Readonly<Record<ConstantResult['kind'], string>> = {
 /** What a pKa is, at which temperature and ionic strength, and the other kinds beside it. */
 export function constantWords(constant: ConstantResult, decimals: number): string {
   const { kind, temperature_C, ionicStrength_M } = constant;
-  const at = `I = ${formatDecimals(ionicStrength_M, 3)} mol/L`;
+  const at = `I\u00a0=\u00a0${formatDecimals(ionicStrength_M, 3)}\u00a0M`;
   const others = (['thermodynamic', 'concentration', 'mixed'] as const)
     .filter((other) => other !== kind && constant[other] !== null)
     .map((other) => `${other} ${formatDecimals(constant[other] ?? 0, decimals)}`);
   const isDilute = kind === 'thermodynamic';
-  const head = `${meaning[kind]}, ${formatDecimals(temperature_C, 1)} °C${isDilute ? '' : `, ${at}`}`;
+  const head = `${meaning[kind]}, ${formatDecimals(temperature_C, 1)}\u00a0°C${isDilute ? '' : `, ${at}`}`;
   if (others.length === 0) return head;
   return `${head}; ${isDilute ? `at ${at} ` : 'beside it '}${others.join(', ')}`;
 }

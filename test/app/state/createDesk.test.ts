@@ -47,6 +47,12 @@ test('a sheet alone is for the run that is shown; one that is refused leaves its
   await desk.open([file('bad.json', '{ "sheet": 1, "sample": { "volume_mL": -1 } }')]);
   expect(present().runs[0].sheet).toBe(before);
   expect(workStore.getState().notAccepted?.refusals[0].code).toBe('sheet-out-of-range');
+  await desk.open([file('contradicting.json', '{ "sheet": 1, "medium": { "solvent": "ethanol" } }')]);
+  expect(present().runs[0].sheet).toBe(before);
+  expect(workStore.getState().notAccepted?.refusals[0]).toMatchObject({
+    code: 'sheet-inconsistent',
+    place: { file: 'contradicting.json' },
+  });
   await desk.open([file('good.json', sheetOf20mL)]);
   expect(present().runs[0].sheet.sample?.volume_mL).toBe(20);
   undo();

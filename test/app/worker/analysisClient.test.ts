@@ -20,17 +20,21 @@ class StubWorker implements WorkerLike {
 }
 
 const silence = 1000;
+const stopPatience = 100;
 let workers: StubWorker[];
 let client: AnalysisClient;
 
 beforeEach(() => {
   vi.useFakeTimers();
   workers = [];
-  client = new AnalysisClient(() => {
-    const worker = new StubWorker();
-    workers.push(worker);
-    return worker;
-  }, silence);
+  client = new AnalysisClient(
+    () => {
+      const worker = new StubWorker();
+      workers.push(worker);
+      return worker;
+    },
+    { silence, stop: stopPatience },
+  );
 });
 
 afterEach(() => {
@@ -86,4 +90,25 @@ test('a worker that fails to start is told', async () => {
   const lost = client.read(new Uint8Array(), 'a');
   workers[0].onerror?.({ message: 'refused by the browser' });
   expect(await lost).toEqual({ kind: 'broken', job: 1, message: 'refused by the browser' });
+});
+
+test('work that does not stop is ended with its worker, and what else is wanted is asked again', async () => {
+  const { answer, stop } = client.analyse(runNamed('a'), { sheet: 1 }, () => {});
+  const other = client.read(new Uint8Array([7]), 'b');
+  stop();
+  await vi.advanceTimersByTimeAsync(stopPatience + 1);
+  expect(await answer).toEqual({ kind: 'stopped', job: 1 });
+  expect(workers[0].isEnded).toBe(true);
+  expect(workers[1].requests).toEqual([{ kind: 'read', job: 2, name: 'b', bytes: new Uint8Array([7]) }]);
+  workers[1].say({ ...refused, job: 2 });
+  expect(await other).toMatchObject({ kind: 'read' });
+});
+
+test('work that stops in time keeps its worker', async () => {
+  const { answer, stop } = client.analyse(runNamed('a'), { sheet: 1 }, () => {});
+  stop();
+  workers[0].say({ kind: 'stopped', job: 1 });
+  await answer;
+  await vi.advanceTimersByTimeAsync(2 * stopPatience);
+  expect(workers[0].isEnded).toBe(false);
 });
