@@ -80,13 +80,17 @@ export function perform(experiment: Experiment): SimulatedRun {
   return run;
 }
 
-/** What each part of a sheet may be replaced by; a part given replaces keys, not the whole part. */
-export type SheetChanges = { readonly [Part in keyof SheetFile]?: Partial<SheetFile[Part]> };
+/** Keys of a sheet's parts with other values; null leaves the key out. */
+export type SheetChanges = {
+  readonly [Part in keyof SheetFile]?: {
+    readonly [Key in keyof NonNullable<SheetFile[Part]>]?: NonNullable<SheetFile[Part]>[Key] | null;
+  };
+};
 
 /** The sheet that declares an experiment truly, its constants and its concentration left to be fitted. */
 export function sheetOf(experiment: Experiment, changes: SheetChanges = {}): SheetFile {
   const { pKa, activity = 'none', background_M = 0 } = experiment;
-  return {
+  const sheet = {
     sheet: 1,
     sample: {
       volume_mL: sampleVolume_mL,
@@ -125,7 +129,13 @@ export function sheetOf(experiment: Experiment, changes: SheetChanges = {}): She
       u: usualErrors.uReading,
       ...changes.reading,
     },
-  } as SheetFile;
+  };
+  return Object.fromEntries(
+    Object.entries(sheet).map(([part, keys]) => [
+      part,
+      typeof keys === 'object' ? Object.fromEntries(Object.entries(keys).filter(([, value]) => value !== null)) : keys,
+    ]),
+  ) as unknown as SheetFile;
 }
 
 /** A run whose rows are all used. */

@@ -286,9 +286,7 @@ describe('the 95 % interval', () => {
     const declared = find(workUpExperiment(acid), 'pKa1');
     const [low, high] = declared.interval95 ?? [null, null];
     expect(((high ?? 0) - (low ?? 0)) / (2 * (declared.u ?? 1))).toBeCloseTo(1.96, 2);
-    const { u: _, ...reading } = sheetOf(acid).reading ?? {};
-    const { volumes_mL, readings } = perform({ ...acid, points: 12 });
-    const result = workUp(runOf(volumes_mL, readings), { ...sheetOf(acid), reading });
+    const result = workUpExperiment({ ...acid, points: 12 }, { reading: { u: null } });
     const estimated = find(result, 'pKa1');
     const [low2, high2] = estimated.interval95 ?? [null, null];
     // Student's t of 10 degrees of freedom (12 points, two fitted quantities): 2.228.
@@ -299,10 +297,7 @@ describe('the 95 % interval', () => {
 
 describe('an assumed value', () => {
   it('is named by every result that it would move noticeably', () => {
-    const { volumes_mL, readings } = perform(acid);
-    const { gain: _, ...burette } = sheetOf(acid).burette ?? {};
-    const { concentration_M: __, ...titrant } = sheetOf(acid).titrant ?? {};
-    const result = workUp(runOf(volumes_mL, readings), { ...sheetOf(acid), burette, titrant });
+    const result = workUpExperiment(acid, { burette: { gain: null }, titrant: { concentration_M: null } });
     expect(find(result, 'burette.gain').state).toBe('assumed');
     expect(find(result, 'concentration').restsOn).toContain('titrant.concentration');
     expect(workUpExperiment(acid).quantities.every(({ restsOn }) => restsOn.length === 0)).toBe(true);
@@ -314,9 +309,8 @@ describe('a run read in mV', () => {
     const { volumes_mL, readings } = perform(acid);
     // An electrode of E0 400 mV and full slope.
     const potentials = readings.map((pH) => 400 - nernstSlope_mV(25) * pH);
-    const sheet = sheetOf(acid, { reading: { kind: 'mV', E0_mV: 400, u: 0.005 * nernstSlope_mV(25) } });
-    const { offset: _, ...reading } = sheet.reading ?? {};
-    const inMV = workUp(runOf(volumes_mL, potentials, 'mV'), { ...sheet, reading });
+    const reading = { kind: 'mV', offset: null, E0_mV: 400, u: 0.005 * nernstSlope_mV(25) } as const;
+    const inMV = workUp(runOf(volumes_mL, potentials, 'mV'), sheetOf(acid, { reading }));
     const inPH = workUpExperiment(acid);
     expect(inMV.ending.code).toBe('fitted');
     expect(inMV.noise?.unit).toBe('mV');

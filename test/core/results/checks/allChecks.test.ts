@@ -118,12 +118,7 @@ describe('noiseFarAboveUsual', () => {
 
   it('sees undeclared noise that no instrument makes', () => {
     const noisy = { ...acid, errors: { seed: 3, uReading: 0.08, uSetting_mL: 0.003 } };
-    const { volumes_mL, readings } = perform(noisy);
-    const { u: _, ...reading } = sheetOf(acid).reading ?? {};
-    const [doubt] = doubtsOf(
-      workUp(runOf(volumes_mL, readings), { ...sheetOf(acid), reading }),
-      'noise-far-above-usual',
-    );
+    const [doubt] = doubtsOf(workUpExperiment(noisy, { reading: { u: null } }), 'noise-far-above-usual');
     expect(doubt.seen).toContain('in pH');
   });
 });
@@ -189,9 +184,7 @@ describe('temperatureOutOfRange', () => {
 
 describe('restsOnAssumption', () => {
   it('names what nobody declared and what rests on it', () => {
-    const { concentration_M: _, ...titrant } = sheetOf(acid).titrant ?? {};
-    const { volumes_mL, readings } = perform(acid);
-    const result = workUp(runOf(volumes_mL, readings), { ...sheetOf(acid), titrant });
+    const result = workUpExperiment(acid, { titrant: { concentration_M: null } });
     const doubts = doubtsOf(result, 'rests-on-assumption');
     expect(doubts.some(({ seen }) => seen.includes('concentration') && seen.includes('titrant concentration'))).toBe(
       true,
