@@ -2,7 +2,7 @@
 export const dash = '–';
 
 /** More decimals than this say nothing a chemist can use; smaller numbers are written with a power of ten. */
-const mostDecimals = 7;
+const mostDecimals = 10;
 
 /** A number rounded for reading, with its uncertainty to the same decimal. */
 export interface FormattedQuantity {

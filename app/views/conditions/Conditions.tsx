@@ -44,12 +44,11 @@ export function Conditions({ run, file, sheet, onOpenFiles }: Props) {
         >
           {showsMore ? 'Fewer conditions' : `More conditions${assumedInMore > 0 ? ` (${assumedInMore} assumed)` : ''}`}
         </button>
-        {showsMore && (
-          <span className="sentence-more">
-            {' '}
-            <SentenceText parts={more} openField={open?.id ?? null} onOpen={openField} />
-          </span>
-        )}
+        {/* Always there, because a printed page shows it all. */}
+        <span className="sentence-more" hidden={!showsMore}>
+          {' '}
+          <SentenceText parts={more} openField={open?.id ?? null} onOpen={openField} />
+        </span>
         {open !== null && opened !== undefined && (
           <FieldPopover
             key={open.id}

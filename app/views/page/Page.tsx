@@ -3,7 +3,7 @@ import type { Desk } from '../../state/createDesk.ts';
 import { toggleRow } from '../../state/toggleRow.ts';
 import { useShownRun } from '../../state/useShownRun.ts';
 import { Conditions } from '../conditions/Conditions.tsx';
-import { declaredQuantities } from '../conditions/declaredQuantities.ts';
+import { declaredFields } from '../conditions/declaredFields.ts';
 import { DropOverlay } from '../drop/DropOverlay.tsx';
 import { CrossedFigure } from '../figure/CrossedFigure.tsx';
 import { Masthead } from '../masthead/Masthead.tsx';
@@ -59,7 +59,7 @@ export function Page({ desk }: { readonly desk: Desk }) {
           <div className="findings" aria-busy={!shown.isCurrent}>
             <div className="figure-side">
               {shown.result === null ? (
-                <div className="figure-empty" />
+                <p className="figure-empty">The curve and its results appear here as soon as the run is fitted.</p>
               ) : (
                 <CrossedFigure result={shown.result} onToggleRow={toggleRow} selectedLine={selectedLine} />
               )}
@@ -72,7 +72,7 @@ export function Page({ desk }: { readonly desk: Desk }) {
               />
             </div>
             {shown.result !== null && (
-              <Results result={shown.result} declared={declaredQuantities(shown.input.sheet, shown.result.sheet)} />
+              <Results result={shown.result} declared={declaredFields(shown.input.sheet, shown.result.sheet)} />
             )}
           </div>
         )}

@@ -14,6 +14,9 @@ interface Props {
   readonly labels: ReadonlyMap<string, string>;
 }
 
+/** Intervals in more characters may break into two lines. */
+const longestLine = 18;
+
 /** One quantity with its uncertainty, its interval, what it is and what it rests on. */
 export function QuantityRow({ quantity, scale, labels }: Props) {
   const { id, label, unit, state, value, u, interval95, restsOn, constant } = quantity;
@@ -45,7 +48,9 @@ export function QuantityRow({ quantity, scale, labels }: Props) {
           {interval === null ? (
             <span className="why">{whyNoNumber(quantity)}</span>
           ) : (
-            <span className="interval-words">{interval}</span>
+            <span className={interval.length > longestLine ? 'interval-words' : 'interval-words short'}>
+              {interval}
+            </span>
           )}
         </td>
       </tr>

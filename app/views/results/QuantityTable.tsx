@@ -1,6 +1,7 @@
 import { Fragment, useState } from 'react';
-import type { Declaration, Doubt, QuantityResult } from '../../../core/index.ts';
+import type { Doubt, QuantityResult } from '../../../core/index.ts';
 import { DoubtNote } from '../../widgets/DoubtNote.tsx';
+import type { DeclaredField } from '../conditions/declaredFields.ts';
 import { intervalScale } from './intervalScale.ts';
 import { QuantityRow } from './QuantityRow.tsx';
 
@@ -8,24 +9,28 @@ interface Props {
   readonly quantities: readonly QuantityResult[];
   /** Doubts that concern one quantity; shown under it. */
   readonly doubts: readonly Doubt[];
-  /** What the sheet says, by id. */
-  readonly declared: ReadonlyMap<string, Declaration>;
+  /** What the conditions say, by id. */
+  readonly declared: ReadonlyMap<string, DeclaredField>;
 }
 
 /** All quantities of the run: the fitted ones first, then what was declared with an uncertainty, then the exact ones. */
-export function QuantityTable({ quantities, doubts, declared: declarations }: Props) {
+export function QuantityTable({ quantities, doubts, declared: conditions }: Props) {
   const [showsExact, setShowsExact] = useState(false);
   const fitted = quantities.filter(({ state }) => state === 'fitted');
   const exact = quantities.filter(isExact);
   const declared = quantities.filter((quantity) => quantity.state !== 'fitted' && !isExact(quantity));
-  const labels = new Map(quantities.map(({ id, label }) => [id, label]));
+  // Results may rest on conditions that are no quantities, such as the scale of the readings.
+  const labels = new Map([
+    ...[...conditions].map(([id, { label }]) => [id, label] as const),
+    ...quantities.map(({ id, label }) => [id, label] as const),
+  ]);
 
   const rows = (group: readonly QuantityResult[]) =>
     group.map((quantity) => (
       <Fragment key={quantity.id}>
         <QuantityRow
           quantity={quantity}
-          scale={intervalScale(quantity, quantities, declarations.get(quantity.id))}
+          scale={intervalScale(quantity, quantities, conditions.get(quantity.id)?.declaration ?? null)}
           labels={labels}
         />
         {doubts

@@ -1,13 +1,14 @@
-import type { Declaration, RunResult } from '../../../core/index.ts';
+import type { RunResult } from '../../../core/index.ts';
 import { DoubtNote } from '../../widgets/DoubtNote.tsx';
+import type { DeclaredField } from '../conditions/declaredFields.ts';
 import { EquivalenceTable } from './EquivalenceTable.tsx';
 import { noiseWords } from './noiseWords.ts';
 import { QuantityTable } from './QuantityTable.tsx';
 
 interface Props {
   readonly result: RunResult;
-  /** What the sheet says of each quantity, by id. */
-  readonly declared: ReadonlyMap<string, Declaration>;
+  /** What the conditions say, by id. */
+  readonly declared: ReadonlyMap<string, DeclaredField>;
 }
 
 /** Everything the run says: how the work ended, quantities, equivalence volumes, doubts. */

@@ -2,7 +2,7 @@ import type { ConstantResult } from '../../../core/index.ts';
 import { formatDecimals } from '../../widgets/formatQuantity.ts';
 
 const meaning: Readonly<Record<ConstantResult['kind'], string>> = {
-  thermodynamic: 'thermodynamic (I = 0)',
+  thermodynamic: 'thermodynamic',
   concentration: 'concentration constant',
   mixed: 'mixed constant',
 };
@@ -17,5 +17,5 @@ export function constantWords(constant: ConstantResult, decimals: number): strin
   const isDilute = kind === 'thermodynamic';
   const head = `${meaning[kind]}, ${formatDecimals(temperature_C, 1)}\u00a0°C${isDilute ? '' : `, ${at}`}`;
   if (others.length === 0) return head;
-  return `${head}; ${isDilute ? `at ${at} ` : 'beside it '}${others.join(', ')}`;
+  return `${head}; ${isDilute ? `at ${at}: ` : 'beside it '}${others.join(', ')}`;
 }

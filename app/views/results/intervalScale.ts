@@ -19,7 +19,7 @@ const within95 = 1.959963984540054;
 export function intervalScale(
   quantity: QuantityResult,
   all: readonly QuantityResult[],
-  declaration: Declaration | undefined,
+  declaration: Declaration | null,
 ): IntervalScale | null {
   const { value, interval95, state } = quantity;
   if (value === null || interval95 === null || interval95[0] === null || interval95[1] === null) return null;

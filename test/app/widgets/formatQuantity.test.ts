@@ -9,6 +9,7 @@ test.each([
   [0.0000001, 0.01, '0.000', '0.010'],
   [-0.0001, 0.01, '0.000', '0.010'],
   [1234.5, 123, '1230', '120'],
+  [0.01181444, 0.0000008, '0.01181444', '0.00000080'],
   [1.23456e-9, 2.3e-11, '1.235 × 10⁻⁹', '0.023 × 10⁻⁹'],
 ])('%d with u %d is written %s, u %s', (value, u, valueText, uText) => {
   expect(formatQuantity(value, u)).toEqual({ value: valueText, u: uText });

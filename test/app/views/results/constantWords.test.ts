@@ -15,7 +15,7 @@ const plain = (text: string) => text.replaceAll('\u00a0', ' ');
 
 test('a constant says what it is, where it holds, and what the other kinds are', () => {
   expect(plain(constantWords(constant, 3))).toBe(
-    'thermodynamic (I = 0), 25.0 °C; at I = 0.100 M concentration 9.307, mixed 9.415',
+    'thermodynamic, 25.0 °C; at I = 0.100 M: concentration 9.307, mixed 9.415',
   );
   expect(plain(constantWords({ ...constant, kind: 'mixed', thermodynamic: null, concentration: null }, 2))).toBe(
     'mixed constant, 25.0 °C, I = 0.100 M',

@@ -23,8 +23,8 @@ test('fitted constants are drawn on one scale: that of the widest', () => {
   const wider = { ...fittedConstant, id: 'pKa2', value: 6, interval95: [5.9, 6.3] } as const;
   const other = { ...fittedConstant, id: 'concentration', value: 1, interval95: [0, 9] } as const;
   const all = [fittedConstant, wider, other];
-  expect(intervalScale(fittedConstant, all, undefined)?.halfWidth).toBeCloseTo(0.3, 12);
-  expect(intervalScale(other, all, undefined)?.halfWidth).toBe(8);
+  expect(intervalScale(fittedConstant, all, null)?.halfWidth).toBeCloseTo(0.3, 12);
+  expect(intervalScale(other, all, null)?.halfWidth).toBe(8);
 });
 
 test('a known quantity is drawn on what was declared of it, however far it moved', () => {
@@ -42,5 +42,5 @@ test('a known quantity is drawn on what was declared of it, however far it moved
 });
 
 test('a bound is not drawn', () => {
-  expect(intervalScale({ ...fittedConstant, interval95: [null, 2] }, [], undefined)).toBe(null);
+  expect(intervalScale({ ...fittedConstant, interval95: [null, 2] }, [], null)).toBe(null);
 });
