@@ -8,10 +8,10 @@ import { useWork } from './useWork.ts';
 export interface ShownRun {
   readonly input: RunInput;
   readonly run: Run;
-  /** The sheet with what is assumed; null where it contradicts itself and never was complete. */
+  /** The sheet with what is assumed; null where it contradicts itself. */
   readonly sheet: Sheet | null;
-  /** The latest result of this run; null before the first. */
-  readonly result: RunResult | null;
+  /** The latest result of this run and the input it belongs to; null before the first. */
+  readonly latest: { readonly input: RunInput; readonly result: RunResult } | null;
   /** True where the result belongs to the inputs as they are now. */
   readonly isCurrent: boolean;
 }
@@ -25,10 +25,9 @@ export function useShownRun(): ShownRun | null {
   const run = decidedRun(input);
   const isCurrent = latest?.input === input;
   // Between two runs there is a moment in which the latest result is of the one before.
-  const result =
-    latest !== null && latest.input.file === input.file && latest.input.index === input.index ? latest.result : null;
-  if (isCurrent) return { input, run, sheet: latest.result.sheet, result, isCurrent };
-  const last = result?.sheet ?? null;
-  const completed = completeSheet(input.sheet, sheetFacts(run, last));
-  return { input, run, sheet: completed.ok ? completed.value : last, result, isCurrent };
+  const isOfThisRun = latest !== null && latest.input.file === input.file && latest.input.index === input.index;
+  const own = isOfThisRun ? latest : null;
+  if (isCurrent) return { input, run, sheet: latest.result.sheet, latest, isCurrent };
+  const completed = completeSheet(input.sheet, sheetFacts(run, own?.result.sheet ?? null));
+  return { input, run, sheet: completed.ok ? completed.value : null, latest: own, isCurrent };
 }

@@ -1,5 +1,5 @@
 /** What stands where there is no number. */
-export const dash = '–';
+const dash = '–';
 
 /** More decimals than this say nothing a chemist can use; smaller numbers are written with a power of ten. */
 const mostDecimals = 10;

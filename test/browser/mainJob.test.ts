@@ -123,6 +123,21 @@ browserTest('conditions saved from the page are the sheet that it opens again', 
   expect(await stepwell.quantity('concentration')).toEqual(changed);
 });
 
+browserTest('substances are added and taken away, and the conditions and results follow', async ({ page }) => {
+  const stepwell = await StepwellPage.open(page, inject('singleFileAddress'));
+  await page.getByRole('button', { name: 'More conditions' }).click();
+  for (const [number, id] of [
+    ['two substances', 'analyte2.concentration'],
+    ['no substance', 'sample.strongIon'],
+    ['one substance', 'concentration'],
+  ]) {
+    await stepwell.field('number of substances in the sample').click();
+    await page.getByRole('dialog').getByRole('button', { name: number }).click();
+    await stepwell.isSettled();
+    expect(await page.locator(`tr[data-quantity="${id}"]`).count(), number).toBe(1);
+  }
+});
+
 browserTest('a point is taken out and put back by keyboard, and every row stays on the page', async ({ page }) => {
   const stepwell = await StepwellPage.open(page, inject('singleFileAddress'));
   const before = await stepwell.quantity('pKa2');

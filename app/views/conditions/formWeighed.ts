@@ -28,7 +28,7 @@ export function kindsOfGroup(groups: number, chargeFullyProtonated: number): str
   return `${numbers[acids]} acid and ${numbers[chargeFullyProtonated]} basic group${plural(chargeFullyProtonated)}`;
 }
 
-export function signed(charge: number): string {
+function signed(charge: number): string {
   return charge > 0 ? `+${charge}` : charge < 0 ? `−${-charge}` : '0';
 }
 

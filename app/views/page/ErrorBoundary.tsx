@@ -1,4 +1,5 @@
 import { Component, type ReactNode } from 'react';
+import { undo } from '../../state/inputStore.ts';
 
 interface State {
   readonly error: Error | null;
@@ -24,6 +25,16 @@ export class ErrorBoundary extends Component<{ readonly children: ReactNode }, S
           </p>
           <button type="button" className="link" onClick={() => this.setState({ error: null })}>
             Draw the page again
+          </button>{' '}
+          <button
+            type="button"
+            className="link"
+            onClick={() => {
+              undo();
+              this.setState({ error: null });
+            }}
+          >
+            Undo the last change and draw the page again
           </button>
         </div>
       </main>

@@ -58,21 +58,24 @@ export function Page({ desk }: { readonly desk: Desk }) {
         {shown !== null && (
           <div className="findings" aria-busy={!shown.isCurrent}>
             <div className="figure-side">
-              {shown.result === null ? (
+              {shown.latest === null ? (
                 <p className="figure-empty">The curve and its results appear here as soon as the run is fitted.</p>
               ) : (
-                <CrossedFigure result={shown.result} onToggleRow={toggleRow} selectedLine={selectedLine} />
+                <CrossedFigure result={shown.latest.result} onToggleRow={toggleRow} selectedLine={selectedLine} />
               )}
               <RowsTable
                 run={shown.run}
-                points={shown.isCurrent ? (shown.result?.points ?? []) : []}
+                points={shown.isCurrent ? (shown.latest?.result.points ?? []) : []}
                 selectedLine={selectedLine}
                 onSelect={setSelectedLine}
                 onToggle={toggleRow}
               />
             </div>
-            {shown.result !== null && (
-              <Results result={shown.result} declared={declaredFields(shown.input.sheet, shown.result.sheet)} />
+            {shown.latest !== null && (
+              <Results
+                result={shown.latest.result}
+                declared={declaredFields(shown.latest.input.sheet, shown.latest.result.sheet)}
+              />
             )}
           </div>
         )}

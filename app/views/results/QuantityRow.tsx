@@ -39,20 +39,20 @@ export function QuantityRow({ quantity, scale, labels }: Props) {
         </th>
         <td className="number value">{shown.value}</td>
         <td className="number">{shown.u ?? '–'}</td>
-        <td className="interval">
-          {value !== null && low !== null && high !== null && scale !== null && (
-            <IntervalBar value={value} low={low} high={high} {...scale} ground={scale.declared} />
-          )}
-        </td>
-        <td>
-          {interval === null ? (
-            <span className="why">{whyNoNumber(quantity)}</span>
-          ) : (
-            <span className={interval.length > longestLine ? 'interval-words' : 'interval-words short'}>
-              {interval}
-            </span>
-          )}
-        </td>
+        {interval === null ? (
+          <td colSpan={2} className="why">
+            {whyNoNumber(quantity)}
+          </td>
+        ) : (
+          <>
+            <td className="interval">
+              {value !== null && low !== null && high !== null && scale !== null && (
+                <IntervalBar value={value} low={low} high={high} {...scale} ground={scale.declared} />
+              )}
+            </td>
+            <td className={interval.length > longestLine ? 'interval-words' : 'interval-words short'}>{interval}</td>
+          </>
+        )}
       </tr>
       {constant !== null && (
         <tr className="remark-row">

@@ -7,6 +7,8 @@ import { QuantityRow } from './QuantityRow.tsx';
 
 interface Props {
   readonly quantities: readonly QuantityResult[];
+  /** False where the work ended without a fit. */
+  readonly isFitted: boolean;
   /** Doubts that concern one quantity; shown under it. */
   readonly doubts: readonly Doubt[];
   /** What the conditions say, by id. */
@@ -14,7 +16,7 @@ interface Props {
 }
 
 /** All quantities of the run: the fitted ones first, then what was declared with an uncertainty, then the exact ones. */
-export function QuantityTable({ quantities, doubts, declared: conditions }: Props) {
+export function QuantityTable({ quantities, isFitted, doubts, declared: conditions }: Props) {
   const [showsExact, setShowsExact] = useState(false);
   const fitted = quantities.filter(({ state }) => state === 'fitted');
   const exact = quantities.filter(isExact);
@@ -64,13 +66,13 @@ export function QuantityTable({ quantities, doubts, declared: conditions }: Prop
       </thead>
       {fitted.length > 0 && (
         <tbody>
-          <GroupHead text="Fitted" />
+          <GroupHead text={isFitted ? 'Fitted' : 'To be fitted'} />
           {rows(fitted)}
         </tbody>
       )}
       {declared.length > 0 && (
         <tbody>
-          <GroupHead text="Known or assumed, and what the run makes of them" />
+          <GroupHead text={isFitted ? 'Known or assumed, and what the run makes of them' : 'Known or assumed'} />
           {rows(declared)}
         </tbody>
       )}

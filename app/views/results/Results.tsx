@@ -27,7 +27,12 @@ export function Results({ result, declared }: Props) {
       </p>
       <div className="result-block">
         <h2>Quantities</h2>
-        <QuantityTable quantities={quantities} doubts={ofQuantities} declared={declared} />
+        <QuantityTable
+          quantities={quantities}
+          isFitted={ending.code === 'fitted'}
+          doubts={ofQuantities}
+          declared={declared}
+        />
       </div>
       <div className="results-aside">
         {general.length > 0 && (
