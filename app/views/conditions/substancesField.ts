@@ -31,7 +31,11 @@ function withSubstances(file: SheetFile, count: number): SheetFile {
   const before: readonly AnalyteFile[] = file.sample?.analytes ?? [{}];
   const kept = before.filter((analyte) => analyte.groups !== 0).slice(0, count);
   const added = Array.from({ length: count - kept.length }, (): AnalyteFile => ({ groups: 1 }));
-  return setAtPath(file, ['sample', 'analytes'], [...kept, ...added]);
+  const edited = setAtPath(file, ['sample', 'analytes'], [...kept, ...added]);
+  // Without substances the strong acid or base is what is titrated: "none" would leave nothing to find.
+  return count === 0 && edited.sample?.strongIon_M === 0
+    ? setAtPath(edited, ['sample', 'strongIon_M'], undefined)
+    : edited;
 }
 
 function words(count: number): string {

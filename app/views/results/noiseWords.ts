@@ -12,6 +12,6 @@ export function noiseWords(noise: NoiseResult): string {
   const chi =
     noise.reducedChiSquare === null
       ? 'no degree of freedom is left'
-      : `reduced χ² ${formatDecimals(noise.reducedChiSquare, 2)} on ${degrees} degrees of freedom`;
+      : `reduced χ² ${noise.reducedChiSquare < 100 ? formatDecimals(noise.reducedChiSquare, 2) : formatSignificant(noise.reducedChiSquare, 3)} on ${degrees} degrees of freedom`;
   return `${parts.join(', ')}, ${how}; ${chi}.`;
 }

@@ -108,6 +108,15 @@ test('fields of two substances write each to its own place', () => {
   expect(editor.set(file, 0.5).sample?.analytes?.[2].concentration_M).toBe(0.5);
 });
 
+test('taking the last substance away leaves its strong acid or base to be fitted', () => {
+  const file: SheetFile = { sheet: 1, sample: { strongIon_M: 0, analytes: [{ groups: 1 }] } };
+  const { editor } = field(file, 'sample.substances');
+  if (editor.kind !== 'choice') throw new Error('a number of substances is a choice');
+  const without = editor.options[0].edit(file);
+  expect(completed(without).sample.strongIon.state).toBe('fitted');
+  expect(editor.options[2].edit(file).sample).toEqual({ strongIon_M: 0, analytes: [{ groups: 1 }, { groups: 1 }] });
+});
+
 test('a run without substances offers its strong acid or base, and a substance', () => {
   const file = sheetOf(4);
   const ids = fieldsOf(file).map(({ id }) => id);
