@@ -44,7 +44,7 @@ export function fitFromScratch(problem: Problem): FitFromScratch {
 export function objectiveOf(fit: ProblemFit): number {
   if (fit.cost === null) return Number.POSITIVE_INFINITY;
   let objective = fit.cost;
-  for (const { sigma } of fit.weighted.runs) for (const s of sigma) objective += 2 * Math.log(s);
+  for (const { whitening } of fit.weighted.runs) objective += whitening.logDeterminant;
   return objective;
 }
 
@@ -63,12 +63,10 @@ function distinct(fits: readonly ProblemFit[]): ProblemFit[] {
 function rankStarts(problem: Problem): Float64Array[] {
   const [run] = problem.runs;
   const weighted = new WeightedProblem(thinned(problem));
-  const [{ run: few, sigma }] = weighted.runs;
-  const slopes = dataSlopes(few.volumes, few.readings);
+  const [{ run: few, whitening }] = weighted.runs;
   const unit = run.design.readingKind === 'mV' ? run.design.nernstSlope_mV : 1;
-  sigma.forEach((_, i) => {
-    sigma[i] = Math.hypot(comparedReadingNoise * unit, comparedSetting_mL * slopes[i]);
-  });
+  const noise = { reading: comparedReadingNoise * unit, setting_mL: comparedSetting_mL, dose_mL: 0 };
+  whitening.set(noise, dataSlopes(few.volumes, few.readings));
   const residuals = new Float64Array(weighted.residualCount);
   return startingValues(run)
     .map((values) => {

@@ -1,10 +1,11 @@
 import type { Problem } from '../model/problem.ts';
 import { type CovarianceEstimate, covarianceOf, estimateCovariance } from './covariance.ts';
 import { dataSlopes } from './dataSlopes.ts';
+import { type EstimatedPart, estimateNoise, type NoiseEstimate } from './estimateNoise.ts';
 import { estimateReadingNoise } from './estimateReadingNoise.ts';
 import { solveLeastSquares } from './leastSquares.ts';
 import { type EndingCode, endings } from './leastSquaresEnding.ts';
-import { declaredNoise, type Noise, type NoiseDeclaration, noiseAt, writeSigma } from './noise.ts';
+import { declaredNoise, type Noise, noiseAt } from './noise.ts';
 import { readingResolution } from './readingResolution.ts';
 import { WeightedProblem } from './weightedProblem.ts';
 
@@ -16,6 +17,9 @@ const mostRounds = 30;
 const standstill = 1e-4;
 /** The same for the noise, relative. */
 const noiseStandstill = 1e-4;
+/** Refits after the restricted likelihood has corrected the noise, and the correction that asks for none, relative. */
+const mostCorrections = 3;
+const smallestCorrection = 2e-3;
 /** Weights that move the solution by more than this part of the last move are taken up more slowly from then on. */
 const slowdown = 0.5;
 const slowestPace = 0.5;
@@ -30,10 +34,13 @@ const knowledgeStepLimit = 4;
 
 /** Noise of one run as it stands in the fit. */
 export interface RunNoise extends Noise {
+  /** Parts that were estimated from the run, with the covariance of their logarithms, row by row. */
+  readonly parts: readonly EstimatedPart[];
+  readonly logCovariance: readonly number[];
   readonly declared: boolean;
   /** Points minus what the data determined; not always a whole number. */
   readonly degreesOfFreedom: number;
-  /** Weighted sum of squares over degrees of freedom; null where none is left. */
+  /** Whitened sum of squares over degrees of freedom; null where none is left. */
   readonly reducedChiSquare: number | null;
 }
 
@@ -42,7 +49,7 @@ export interface ProblemFit {
   readonly parameters: Float64Array;
   /** Σ of squared whitened residuals, knowledge included; null where the curve could not be computed. */
   readonly cost: number | null;
-  /** At the solution: curves, slopes and sigma of every run. */
+  /** At the solution: curves, slopes and weights of every run. */
   readonly weighted: WeightedProblem;
   readonly residuals: Float64Array;
   readonly jacobian: Float64Array;
@@ -53,27 +60,35 @@ export interface ProblemFit {
 /**
  * Fits a problem from one start. The weight of a volume error follows the
  * slope of the curve, and undeclared noise follows the residuals, so that
- * weighing and fitting alternate until the solution stands still; the last
- * weights are then frozen.
+ * weighing and fitting alternate until the solution stands still; restricted
+ * likelihood then sets undeclared noise, and the last weights are frozen.
  *
  * @param start one number per parameter of the problem
  */
 export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
   const weighted = new WeightedProblem(problem);
-  const declarations = weighted.runs.map(({ run }) => declaredNoise(run.sheet, run.design.nernstSlope_mV));
-  const unitsPerPH = weighted.runs.map(({ run }) => (run.design.readingKind === 'mV' ? run.design.nernstSlope_mV : 1));
-  const smallest = weighted.runs.map(({ run }) => readingResolution(run.readings) / Math.sqrt(12));
+  const { runs } = weighted;
+  const declarations = runs.map(({ run }) => declaredNoise(run.sheet, run.design.nernstSlope_mV));
+  const smallest = runs.map(({ run }) => readingResolution(run.readings) / Math.sqrt(12));
   const stepLimits = stepLimitsOf(problem);
-  let readings = declarations.map((declaration, r) =>
-    declaration.kind === 'declared' ? declaration.reading : firstReadingNoise * unitsPerPH[r],
-  );
-  weighted.runs.forEach(({ run, sigma }, r) => {
-    writeSigma(noiseAt(declarations[r], readings[r]), dataSlopes(run.volumes, run.readings), sigma);
+  let readings = declarations.map((declaration, r) => {
+    const { readingKind, nernstSlope_mV } = runs[r].run.design;
+    return declaration.kind === 'declared'
+      ? declaration.reading
+      : firstReadingNoise * (readingKind === 'mV' ? nernstSlope_mV : 1);
   });
+  let estimates: readonly NoiseEstimate[] | null = null;
+  const weigh = () =>
+    runs.forEach(({ whitening, slopes }, r) => {
+      whitening.set(estimates?.[r].noise ?? noiseAt(declarations[r], readings[r]), slopes);
+    });
+  for (const { run, slopes } of runs) slopes.set(dataSlopes(run.volumes, run.readings));
+  weigh();
 
   let parameters = start;
   let previousMove = Number.POSITIVE_INFINITY;
   let pace = 1;
+  let corrections = 0;
   for (let round = 0; ; round++) {
     const rough = round === 0;
     const result = solveLeastSquares(weighted, parameters, {
@@ -85,37 +100,54 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
     const covariance = estimateCovariance(result.jacobian, weighted.residualCount, weighted.parameterCount);
     const moved = largestMove(parameters, result.parameters, covariance);
     parameters = result.parameters;
-    const freedom = weighted.runs.map((_, r) => degreesOfFreedom(weighted, r, result.jacobian, covariance));
+    const freedom = runs.map((_, r) => degreesOfFreedom(weighted, r, result.jacobian, covariance));
+    // Curves and values belong to the point asked last, which need not be the solution.
+    weighted.residuals(parameters, result.residuals);
 
-    const finish = (): ProblemFit => {
-      // Curves and values belong to the point asked last, which need not be the solution.
-      weighted.residuals(parameters, result.residuals);
-      const noise = weighted.runs.map((_, r) =>
-        describeNoise(weighted, r, declarations[r], readings[r], freedom[r], result.residuals),
-      );
-      const { ending, cost, residuals, jacobian } = result;
-      return { ending, parameters, cost, weighted, residuals, jacobian, covariance, noise };
-    };
+    const finish = (): ProblemFit => ({
+      ...result,
+      parameters,
+      weighted,
+      covariance,
+      noise: runs.map((_, r) => ({
+        ...(estimates?.[r].noise ?? noiseAt(declarations[r], readings[r])),
+        parts: estimates?.[r].parts ?? [],
+        logCovariance: estimates?.[r].logCovariance ?? [],
+        declared: declarations[r].kind === 'declared',
+        degreesOfFreedom: freedom[r],
+        reducedChiSquare: freedom[r] > 0 ? sumOfSquares(weighted, r, result.residuals) / freedom[r] : null,
+      })),
+    });
     if (!usable || round === mostRounds) return finish();
 
-    weighted.refreshSlopes();
-    const next = readings.map((reading, r) => {
-      if (!(freedom[r] > 0)) return reading;
-      const { sigma, slopes, firstResidual } = weighted.runs[r];
-      const misses = sigma.map((s, i) => s * result.residuals[firstResidual + i]);
-      return estimateReadingNoise(declarations[r], misses, slopes, freedom[r], smallest[r]);
-    });
-    const noiseMoved = next.some((reading, r) => Math.abs(reading / readings[r] - 1) > noiseStandstill);
-    if (!rough && moved < standstill && !noiseMoved) return finish();
-    // Where the model is far from the readings, full weights can swing from one solution to another and back.
-    if (round > 1 && moved > slowdown * previousMove) pace = Math.max(slowestPace, 0.5 * pace);
-    previousMove = moved;
-    readings = readings.map((reading, r) => towards(reading, next[r], pace));
-    weighted.runs.forEach(({ slopes, sigma }, r) => {
-      const target = new Float64Array(sigma.length);
-      writeSigma(noiseAt(declarations[r], next[r]), slopes, target);
-      for (let i = 0; i < sigma.length; i++) sigma[i] = towards(sigma[i], target[i], round === 0 ? 1 : pace);
-    });
+    if (estimates === null) {
+      weighted.refreshSlopes(rough ? 1 : pace);
+      const next = readings.map((reading, r) => {
+        const { whitening, slopes, run, predicted } = runs[r];
+        if (!(freedom[r] > 0)) return reading;
+        const misses = predicted.map((value, i) => value - run.readings[i]);
+        return estimateReadingNoise(declarations[r], misses, whitening, slopes, freedom[r], smallest[r]);
+      });
+      const noiseMoved = next.some((reading, r) => Math.abs(reading / readings[r] - 1) > noiseStandstill);
+      const stands = !rough && moved < standstill && !noiseMoved;
+      if (stands && declarations.every(({ kind }) => kind === 'declared')) return finish();
+      // Where the model is far from the readings, full weights can swing from one solution to another and back.
+      if (round > 1 && moved > slowdown * previousMove) pace = Math.max(slowestPace, 0.5 * pace);
+      previousMove = moved;
+      readings = readings.map((reading, r) => (pace === 1 ? next[r] : reading * (next[r] / reading) ** pace));
+      if (stands && freedom.every((value) => value > 0))
+        estimates = estimateNoise(weighted, parameters, declarations, readings, smallest);
+      else if (stands) return finish();
+    } else {
+      const before = estimates;
+      weighted.refreshSlopes(1);
+      const next = estimateNoise(weighted, parameters, declarations, readings, smallest);
+      const corrected = next.some(({ noise }, r) => largestCorrection(noise, before[r].noise) > smallestCorrection);
+      corrections++;
+      if (!corrected || corrections >= mostCorrections) return finish();
+      estimates = next;
+    }
+    weigh();
   }
 }
 
@@ -126,36 +158,29 @@ function degreesOfFreedom(
   jacobian: Float64Array,
   { covariance }: CovarianceEstimate,
 ): number {
-  const { firstResidual, sigma } = weighted.runs[run];
+  const { firstResidual, predicted } = weighted.runs[run];
   const { parameterCount, residualCount } = weighted;
   let determined = 0;
   for (let a = 0; a < parameterCount; a++)
     for (let b = 0; b <= a; b++) {
       let product = 0;
-      for (let i = firstResidual; i < firstResidual + sigma.length; i++)
+      for (let i = firstResidual; i < firstResidual + predicted.length; i++)
         product += jacobian[a * residualCount + i] * jacobian[b * residualCount + i];
       determined += (a === b ? 1 : 2) * product * covariance[a * parameterCount + b];
     }
-  return sigma.length - determined;
+  return predicted.length - determined;
 }
 
-function describeNoise(
-  weighted: WeightedProblem,
-  run: number,
-  declaration: NoiseDeclaration,
-  reading: number,
-  freedom: number,
-  residuals: Float64Array,
-): RunNoise {
-  const { firstResidual, sigma } = weighted.runs[run];
+function sumOfSquares(weighted: WeightedProblem, run: number, residuals: Float64Array): number {
+  const { firstResidual, predicted } = weighted.runs[run];
   let sum = 0;
-  for (let i = firstResidual; i < firstResidual + sigma.length; i++) sum += residuals[i] ** 2;
-  return {
-    ...noiseAt(declaration, reading),
-    declared: declaration.kind === 'declared',
-    degreesOfFreedom: freedom,
-    reducedChiSquare: freedom > 0 ? sum / freedom : null,
-  };
+  for (let i = firstResidual; i < firstResidual + predicted.length; i++) sum += residuals[i] ** 2;
+  return sum;
+}
+
+function largestCorrection(noise: Noise, before: Noise): number {
+  const change = (to: number, from: number) => (from > 0 ? Math.abs(to / from - 1) : 0);
+  return Math.max(change(noise.reading, before.reading), change(noise.setting_mL, before.setting_mL));
 }
 
 /** Largest change of a determined parameter in units of its uncertainty. */
@@ -178,9 +203,4 @@ function stepLimitsOf(problem: Problem): Float64Array {
       if (role.kind === 'acidity' && binding.kind === 'parameter') limits[binding.parameter] = constantStepLimit;
     });
   return limits;
-}
-
-/** A positive number on its way to another, by a part of their ratio. */
-function towards(from: number, to: number, pace: number): number {
-  return pace === 1 ? to : from * (to / from) ** pace;
 }

@@ -2,6 +2,7 @@ import { bindingTerms, boundValue } from '../model/binding.ts';
 import type { Problem, ProblemRun } from '../model/problem.ts';
 import { RunModel } from '../model/runModel.ts';
 import type { LeastSquaresProblem } from './leastSquaresProblem.ts';
+import { Whitening } from './whitening.ts';
 
 /** One run inside a weighted problem; arrays have one entry per point unless said otherwise. */
 export interface WeightedRun {
@@ -13,14 +14,14 @@ export interface WeightedRun {
   readonly values: Float64Array;
   /** Predicted readings there. */
   readonly predicted: Float64Array;
-  /** d reading / d burette volume where the curve passes the readings, unit/mL; see `refreshSlopes`. */
+  /** d reading / d burette volume as it weighs the volume errors, unit/mL; see `refreshSlopes`. */
   readonly slopes: Float64Array;
-  /** Standard uncertainty of each residual, in the unit of the reading; set by whoever weighs the points. */
-  readonly sigma: Float64Array;
+  /** Covariance of its residuals; set by whoever weighs the points. */
+  readonly whitening: Whitening;
 }
 
 /**
- * A problem as the engine sees it: readings of all runs whitened by `sigma`,
+ * A problem as the engine sees it: readings of all runs, whitened,
  * then one residual of weight one for every δ of declared knowledge.
  */
 export class WeightedProblem implements LeastSquaresProblem {
@@ -61,7 +62,7 @@ export class WeightedProblem implements LeastSquaresProblem {
         values: new Float64Array(run.design.quantities.length),
         predicted: new Float64Array(count),
         slopes: new Float64Array(count),
-        sigma: new Float64Array(count).fill(1),
+        whitening: new Whitening(run.volumes),
       };
       firstResidual += count;
       return weighted;
@@ -86,49 +87,74 @@ export class WeightedProblem implements LeastSquaresProblem {
     const kept = this.isKept(parameters);
     if (!kept) this.curveEvaluations++;
     for (let r = 0; r < this.runs.length; r++) {
-      const { run, model, values, predicted, sigma, firstResidual } = this.runs[r];
+      const { run, model, values, predicted, whitening, firstResidual } = this.runs[r];
       for (let q = 0; q < values.length; q++) values[q] = boundValue(run.bindings[q], parameters);
       if (kept) predicted.set(this.keptCurves[r]);
       else if (!model.predict(values, predicted)) return false;
-      for (let i = 0; i < predicted.length; i++)
-        residuals[firstResidual + i] = (predicted[i] - run.readings[i]) / sigma[i];
+      for (let i = 0; i < predicted.length; i++) residuals[firstResidual + i] = predicted[i] - run.readings[i];
+      whitening.apply(residuals, firstResidual);
     }
+    this.writeKnowledge(parameters, residuals);
+    return true;
+  }
+
+  /** Writes the residuals of declared knowledge behind those of the readings. */
+  writeKnowledge(parameters: Float64Array, residuals: Float64Array): void {
     this.knowledge.forEach((parameter, k) => {
       residuals[this.readingCount + k] = parameters[parameter];
     });
-    return true;
   }
 
   /** Called directly after `residuals` at the same parameters. */
   derivatives(parameters: Float64Array, jacobian: Float64Array): boolean {
-    const kept = this.isKept(parameters);
-    if (!kept) this.derivativeEvaluations++;
-    jacobian.fill(0);
-    this.runs.forEach((weighted, r) => {
-      const { model, predicted, sigma, firstResidual } = weighted;
-      const { wanted, terms, derivatives, slopes } = this.moving[r];
-      const count = sigma.length;
-      if (!kept) {
+    if (!this.isKept(parameters)) {
+      this.derivativeEvaluations++;
+      this.runs.forEach(({ model, predicted }, r) => {
+        const { wanted, derivatives, slopes } = this.moving[r];
         model.differentiate(wanted, derivatives, slopes);
         this.keptCurves[r].set(predicted);
-      }
-      for (let j = 0; j < wanted.length; j++) {
-        for (const { parameter, sensitivity } of terms[j]) {
+      });
+      this.keptParameters.set(parameters);
+    }
+    this.writePlainJacobian(jacobian);
+    for (const { whitening, firstResidual } of this.runs)
+      for (let j = 0; j < this.parameterCount; j++) whitening.apply(jacobian, j * this.residualCount + firstResidual);
+    return true;
+  }
+
+  /** Writes the derivatives of the readings, not whitened, at the parameters differentiated last, with the rows of knowledge. */
+  writePlainJacobian(jacobian: Float64Array): void {
+    jacobian.fill(0);
+    this.runs.forEach(({ predicted, firstResidual }, r) => {
+      const { terms, derivatives } = this.moving[r];
+      const count = predicted.length;
+      terms.forEach((list, j) => {
+        for (const { parameter, sensitivity } of list) {
           const column = parameter * this.residualCount + firstResidual;
-          for (let i = 0; i < count; i++) jacobian[column + i] += (sensitivity * derivatives[j * count + i]) / sigma[i];
+          for (let i = 0; i < count; i++) jacobian[column + i] += sensitivity * derivatives[j * count + i];
         }
-      }
+      });
     });
     this.knowledge.forEach((parameter, k) => {
       jacobian[parameter * this.residualCount + this.readingCount + k] = 1;
     });
-    this.keptParameters.set(parameters);
-    return true;
   }
 
-  /** Takes the slopes that weigh the volume errors from the curve asked last. */
-  refreshSlopes(): void {
-    for (const { run, model, slopes } of this.runs) model.slopesAtReadings(run.readings, slopes);
+  /**
+   * Takes the slopes that weigh the volume errors from the curve asked last.
+   *
+   * @param pace 1 takes the new slopes, less goes part of the way to them
+   */
+  refreshSlopes(pace: number): void {
+    for (const { run, model, slopes } of this.runs) {
+      const before = slopes.slice();
+      model.slopesAtReadings(run.readings, slopes);
+      if (pace === 1) continue;
+      for (let i = 0; i < slopes.length; i++) {
+        const ratio = Math.abs(slopes[i] / before[i]);
+        if (ratio > 0 && Number.isFinite(ratio)) slopes[i] = Math.sign(slopes[i]) * Math.abs(before[i]) * ratio ** pace;
+      }
+    }
   }
 
   private isKept(parameters: Float64Array): boolean {

@@ -79,7 +79,7 @@ function conclude(
   fitted: FitFromScratch,
   ladder: Ladder | null,
 ): RunResult {
-  const ending = endingOfFit(fitted);
+  const ending = endingOfFit(fitted, run, shape, sheet);
   return ending.code === 'fitted' || ending.code === 'predicted'
     ? describeFittedRun(run, sheet, used, shape, fitted, ladder, ending)
     : describeUnfittedRun(run, sheet, used, shape, ending);

@@ -21,10 +21,11 @@ export function assumedInfluences(fit: ProblemFit, weighted: WeightedRun): Assum
   const { design } = weighted.run;
   const assumed = design.quantities.flatMap((quantity, q) => (isAssumedFixed(quantity) ? [q] : []));
   if (assumed.length === 0) return [];
-  const count = weighted.sigma.length;
+  const count = weighted.predicted.length;
   const derivatives = new Float64Array(assumed.length * count);
   weighted.model.predict(weighted.values, weighted.predicted);
   weighted.model.differentiate(Int32Array.from(assumed), derivatives, new Float64Array(count));
+  for (let j = 0; j < assumed.length; j++) weighted.whitening.apply(derivatives, j * count);
   const { parameterCount, residualCount } = fit.weighted;
   const { covariance } = fit.covariance;
   return assumed.map((q, j) => {
@@ -33,8 +34,7 @@ export function assumedInfluences(fit: ProblemFit, weighted: WeightedRun): Assum
     const pull = new Float64Array(parameterCount);
     for (let a = 0; a < parameterCount; a++) {
       const column = a * residualCount + weighted.firstResidual;
-      for (let i = 0; i < count; i++)
-        pull[a] += (fit.jacobian[column + i] * derivatives[j * count + i]) / weighted.sigma[i];
+      for (let i = 0; i < count; i++) pull[a] += fit.jacobian[column + i] * derivatives[j * count + i];
     }
     const parameterShift = new Float64Array(parameterCount);
     for (let a = 0; a < parameterCount; a++)

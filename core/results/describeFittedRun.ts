@@ -70,7 +70,7 @@ export function describeFittedRun(
     noise: {
       reading: noise.reading,
       setting_mL: noise.setting_mL,
-      dose_mL: 0,
+      dose_mL: noise.dose_mL,
       unit: design.readingKind,
       declared: noise.declared,
       reducedChiSquare: noise.reducedChiSquare,

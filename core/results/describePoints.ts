@@ -14,7 +14,7 @@ export function describePoints(
   weighted: WeightedRun | null,
 ): PointResult[] {
   const residuals = weighted === null ? null : residualsOfRows(run, weighted);
-  const u = new Map(used.rows.map((row, i) => [row, weighted === null ? null : weighted.sigma[i]]));
+  const u = new Map(used.rows.map((row, i) => [row, weighted === null ? null : weighted.whitening.sigma[i]]));
   return run.rows.map((row, i) => ({
     line: row.line,
     volume_mL: row.volume_mL,

@@ -4,6 +4,7 @@ import { type EndingCode, endings } from '../fit/leastSquaresEnding.ts';
 import { buildProblem } from '../model/problem.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
+import { directionOfTitrant } from './directionOfTitrant.ts';
 import type { RunEnding, RunEndingCode } from './runResult.ts';
 import type { UsedPoints } from './usedPoints.ts';
 
@@ -53,9 +54,34 @@ const codes: Record<EndingCode, RunEndingCode> = {
   stopped: 'stopped',
 };
 
+/** What helps where a fit has no usable end. */
+const remedies: Partial<Record<RunEndingCode, string>> = {
+  'not-converged':
+    'Compare what is declared with the run: the titrant, the form weighed, the number of groups, concentrations and the electrode; or give a start for what is fitted.',
+  'no-solution': 'Compare what is declared with the run: unit of the readings, electrode, volumes and concentrations.',
+  stopped: 'Start it again to have results.',
+};
+
 /** What the end of a fit means for its run. */
-export function endingOfFit({ fit }: FitFromScratch): RunEnding {
+export function endingOfFit({ fit }: FitFromScratch, run: Run, shape: ShapeOfRun, sheet: Sheet): RunEnding {
   const fitted = fit.weighted.problem.parameters.some(({ kind }) => kind === 'fitted');
   const code = codes[fit.ending];
-  return { code: code === 'fitted' && !fitted ? 'predicted' : code, message: endings[fit.ending].message };
+  const { message } = endings[fit.ending];
+  const remedy = remedies[code];
+  if (remedy === undefined) return { code: code === 'fitted' && !fitted ? 'predicted' : code, message };
+  return { code, message: [message, ...contradictions(run, shape, sheet), remedy].join(' ') };
+}
+
+/** What the sheet says and the readings deny. */
+function contradictions(run: Run, shape: ShapeOfRun, sheet: Sheet): string[] {
+  const { reading, titrant } = sheet;
+  if (reading.kind !== run.readingKind)
+    return [`Readings in ${reading.kind} are declared, but those of the file look like ${run.readingKind}.`];
+  const seen = directionOfTitrant(shape, run.readingKind);
+  const { value: declared } = titrant.kind;
+  if (shape.direction === 'flat') return ['The readings hardly change.'];
+  if (declared === 'solution' || declared === seen) return [];
+  return [
+    `The pH ${seen === 'base' ? 'rises' : 'falls'}, as with ${seen === 'base' ? 'a base' : 'an acid'}, but the titrant is declared as ${declared === 'base' ? 'a base' : 'an acid'}.`,
+  ];
 }

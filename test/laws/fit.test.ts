@@ -42,7 +42,7 @@ describe('a fit from the automatic start', () => {
     }
     // At least 99 % of the runs.
     expect(missed).toBeLessThanOrEqual(2);
-  });
+  }, 120_000);
 
   it('returns the truth of runs without noise', () => {
     for (let seed = 1; seed <= 40; seed++) {
@@ -57,7 +57,7 @@ describe('a fit from the automatic start', () => {
         expect(Math.abs(fit.parameters[j] - truth[j])).toBeLessThan(1e-3 * u);
       });
     }
-  });
+  }, 60_000);
 });
 
 describe('a fit', () => {

@@ -3,6 +3,7 @@ import type { Analysis } from '../analysis.ts';
 import { activityOutOfRange } from './activityOutOfRange.ts';
 import { beyondReach } from './beyondReach.ts';
 import { concentrationOfNothing } from './concentrationOfNothing.ts';
+import { constantsOverlap } from './constantsOverlap.ts';
 import { fewPoints } from './fewPoints.ts';
 import { noiseFarAboveUsual } from './noiseFarAboveUsual.ts';
 import { residualsWander } from './residualsWander.ts';
@@ -17,6 +18,7 @@ export const allChecks: readonly ((analysis: Analysis) => Doubt[])[] = [
   residualsWander,
   volumesDisagree,
   noiseFarAboveUsual,
+  constantsOverlap,
   beyondReach,
   concentrationOfNothing,
   fewPoints,

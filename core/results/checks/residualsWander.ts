@@ -6,17 +6,24 @@ const factor = 3.5;
 /** With fewer points the normal approximation to the count is poor. */
 const fewestPoints = 12;
 
+/** Residuals below this part of their uncertainties, root mean square, may do as they like: they move no result. */
+const negligiblePart = 0.1;
+
 /**
  * Residuals that keep their sign for long: the runs test on their signs in
  * order of volume. Source: Wald, A.; Wolfowitz, J., Ann. Math. Stat. 11 (1940) 147–162.
  */
 export function residualsWander({ points }: Analysis): Doubt[] {
-  const residuals = points
-    .filter((point) => point.used && point.residual !== null && point.residual !== 0)
-    .sort((a, b) => a.volume_mL - b.volume_mL)
-    .map((point) => Math.sign(point.residual ?? 0));
-  const count = residuals.length;
+  const compared = points
+    .flatMap(({ used, volume_mL, residual, u }) =>
+      used && residual !== null && residual !== 0 && u !== null ? [{ volume_mL, residual, u }] : [],
+    )
+    .sort((a, b) => a.volume_mL - b.volume_mL);
+  const count = compared.length;
   if (count < fewestPoints) return [];
+  const chiSquare = compared.reduce((sum, { residual, u }) => sum + (residual / u) ** 2, 0);
+  if (chiSquare < count * negligiblePart ** 2) return [];
+  const residuals = compared.map(({ residual }) => Math.sign(residual));
   const positive = residuals.filter((sign) => sign > 0).length;
   const negative = count - positive;
   const runs = 1 + residuals.filter((sign, i) => i > 0 && sign !== residuals[i - 1]).length;
