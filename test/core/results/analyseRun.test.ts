@@ -115,6 +115,17 @@ describe('the ending', () => {
     expect(result.quantities.every(({ state, value }) => (state === 'fitted') === (value === null))).toBe(true);
   });
 
+  it('of a fit without a usable end says what the sheet denies, and what to do', () => {
+    const wrongTitrant = workUpExperiment(acid, { titrant: { kind: 'acid' } });
+    expect(wrongTitrant.ending.code).toBe('not-converged');
+    expect(wrongTitrant.ending.message).toMatch(
+      /pH rises, as with a base, but the titrant is declared as an acid\. Compare/,
+    );
+    const wrongUnit = workUpExperiment(acid, { reading: { kind: 'mV', offset: null, E0_mV: 400, u: null } });
+    expect(['not-converged', 'no-solution']).toContain(wrongUnit.ending.code);
+    expect(wrongUnit.ending.message).toContain('Readings in mV are declared, but those of the file look like pH.');
+  });
+
   it('asks for as many points as are needed for what is fitted', () => {
     // Six fitted quantities and two to spare: eight; five would do for one of them.
     const many: Experiment = { pKa: [3, 5, 7, 9, 11], end_mL: 14, points: 7 };

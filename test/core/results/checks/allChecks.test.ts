@@ -98,6 +98,37 @@ describe('residualsWander', () => {
   });
 });
 
+describe('residualsWander on a run without noise', () => {
+  it('is silent: what is missed is far below the noise', () => {
+    const { errors: _, ...exact } = acid;
+    expect(doubtsOf(workUpExperiment(exact), 'residuals-wander')).toEqual([]);
+    expect(doubtsOf(workUpExperiment(exact, { reading: { u: null } }), 'residuals-wander')).toEqual([]);
+  });
+});
+
+describe('constantsOverlap', () => {
+  const two = { groups: 2, chargeFullyProtonated: 0, protonsLostAsWeighed: 0 };
+
+  it('sees two groups in the curve of one', () => {
+    const result = workUpExperiment(acid, { sample: { analytes: [two] } });
+    const [doubt, ...more] = doubtsOf(result, 'pKa-overlap');
+    expect(more).toEqual([]);
+    expect(doubt.place.quantity).toBe('pKa2');
+    // Half the concentration, and constants that differ by log 4: the very same curve, with a beautiful fit.
+    const concentration = result.quantities.find(({ id }) => id === 'concentration')?.value ?? 0;
+    expect(Math.abs(concentration - 0.005)).toBeLessThan(1e-4);
+  });
+
+  it('believes in alike groups where the concentration is declared', () => {
+    const analytes = [{ ...two, concentration_M: 0.005 }];
+    expect(doubtsOf(workUpExperiment(acid, { sample: { analytes } }), 'pKa-overlap')).toEqual([]);
+  });
+
+  it('is silent about groups that are close but told apart', () => {
+    expect(doubtsOf(workUpExperiment({ ...diprotic, pKa: [4.2, 5.1] }), 'pKa-overlap')).toEqual([]);
+  });
+});
+
 describe('volumesDisagree', () => {
   it('sees a step that the model does not have', () => {
     const { volumes_mL, readings } = perform(diprotic);
