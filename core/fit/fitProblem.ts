@@ -53,6 +53,8 @@ export interface ProblemFit {
   readonly weighted: WeightedProblem;
   readonly residuals: Float64Array;
   readonly jacobian: Float64Array;
+  /** The same before whitening, for other weights. */
+  readonly plainJacobian: Float64Array;
   readonly covariance: CovarianceEstimate;
   readonly noise: readonly RunNoise[];
 }
@@ -108,6 +110,7 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
       ...result,
       parameters,
       weighted,
+      plainJacobian: plainJacobianAt(weighted, parameters, result.ending),
       covariance,
       noise: runs.map((_, r) => ({
         ...(estimates?.[r].noise ?? noiseAt(declarations[r], readings[r])),
@@ -149,6 +152,15 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
     }
     weigh();
   }
+}
+
+/** Derivatives without weights at the solution, where the model stands already unless its last trial was refused. */
+function plainJacobianAt(weighted: WeightedProblem, parameters: Float64Array, ending: EndingCode): Float64Array {
+  const jacobian = new Float64Array(weighted.residualCount * weighted.parameterCount);
+  if (ending === 'start-not-computable' || parameters.length === 0) return jacobian;
+  weighted.derivatives(parameters, jacobian);
+  weighted.writePlainJacobian(jacobian);
+  return jacobian;
 }
 
 /** Points of a run minus the directions that they determined: the sum of 1 − leverage over its readings. */

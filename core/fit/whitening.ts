@@ -83,4 +83,33 @@ export class Whitening {
       values[first + i] = added * inverse[i];
     }
   }
+
+  /** The transposed whitening of the numbers of all points, in place: what each residual passes on to the whitened ones. */
+  applyTransposed(values: Float64Array, first: number): void {
+    const { order, slopes, inverse, gains } = this;
+    if (!this.accumulates) {
+      this.apply(values, first);
+      return;
+    }
+    let passed = 0;
+    for (let k = order.length - 1; k >= 0; k--) {
+      const i = order[k];
+      const added = inverse[i] * values[first + i] + gains[i] * passed;
+      passed -= slopes[i] * added;
+      values[first + i] = added;
+    }
+  }
+
+  /** Variance that accumulating errors of variance one per dose give to Σ influence · residual. */
+  doseVariance(influence: Float64Array): number {
+    const { order, isDosed, slopes } = this;
+    let later = 0;
+    let variance = 0;
+    for (let k = order.length - 1; k >= 0; k--) {
+      const i = order[k];
+      later += influence[i] * slopes[i];
+      if (isDosed[k] === 1) variance += later ** 2;
+    }
+    return variance;
+  }
 }

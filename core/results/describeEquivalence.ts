@@ -1,6 +1,7 @@
 import type { ProblemFit } from '../fit/fitProblem.ts';
 import { parameterGradient, uncertaintyOf } from '../fit/uncertaintyOf.ts';
 import type { WeightedRun } from '../fit/weightedProblem.ts';
+import { sharesOf } from '../inference/shares.ts';
 import { equivalenceVolumes } from '../model/equivalenceVolumes.ts';
 import { numberOrNull } from './numberOrNull.ts';
 import type { EquivalenceResult } from './runResult.ts';
@@ -19,6 +20,7 @@ export function equivalenceByFit(fit: ProblemFit, weighted: WeightedRun): Equiva
       volume_mL: u === null ? null : numberOrNull(found.volume_mL),
       u: u === null || !isMoved ? null : numberOrNull(u),
       by: 'fit' as const,
+      shares: u === null || !isMoved ? [] : sharesOf(fit, gradient),
       remark: found.countedAs,
     };
   });
@@ -57,6 +59,7 @@ export function equivalenceByReadings(
       volume_mL: step.volume_mL,
       u: step.u_mL,
       by: 'derivative' as const,
+      shares: [],
       remark: `steepest point; ${describeRange(pointsUsed, from, to)}`,
     };
   });
@@ -67,6 +70,7 @@ export function equivalenceByReadings(
       volume_mL: line.volume_mL,
       u: line.u_mL,
       by: 'gran',
+      shares: [],
       remark: `${line.kind}; ${describeRange(line.pointsUsed, ...line.range_mL)}`,
     });
   }

@@ -1,6 +1,7 @@
 import type { ShapeOfRun } from '../endpoints/shapeOfRun.ts';
 import type { FitFromScratch } from '../fit/fitFromScratch.ts';
 import type { Ladder } from '../inference/chooseGroups.ts';
+import { settledFit } from '../inference/settledFit.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
 import { Speciation } from '../speciation/speciation.ts';
@@ -29,8 +30,9 @@ export function describeFittedRun(
   ladder: Ladder | null,
   ending: RunEnding,
 ): RunResult {
-  const { fit, minima } = fitted;
   const index = 0;
+  const { fit, intervals } = settledFit(fitted.fit, index);
+  const { minima } = fitted;
   const weighted = fit.weighted.runs[index];
   const { design } = weighted.run;
   const noise = fit.noise[index];
@@ -44,7 +46,7 @@ export function describeFittedRun(
   const curve = drawCurve(weighted, stepVolumes, asPH.pH);
   const speciation = new Speciation(design, weighted.values, alongCurve(curve));
   const freedomOfNoise = noise.declared ? Number.POSITIVE_INFINITY : noise.degreesOfFreedom;
-  const quantities = describeQuantities(fit, weighted, sheet, freedomOfNoise, speciation);
+  const quantities = describeQuantities(fit, weighted, sheet, intervals, freedomOfNoise, speciation);
   const points = describePoints(run, used, asPH, weighted);
   const analysis: Analysis = {
     run,

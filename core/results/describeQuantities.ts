@@ -1,8 +1,9 @@
 import { constantInMedium } from '../chemistry/constantInMedium.ts';
 import type { ProblemFit } from '../fit/fitProblem.ts';
-import { covarianceBetween, parameterGradient, uncertaintyOf } from '../fit/uncertaintyOf.ts';
+import { covarianceBetween, parameterGradient } from '../fit/uncertaintyOf.ts';
 import type { WeightedRun } from '../fit/weightedProblem.ts';
-import { covarianceInterval } from '../inference/covarianceInterval.ts';
+import type { Intervals } from '../inference/intervals.ts';
+import { sharesOf } from '../inference/shares.ts';
 import type { Quantity } from '../model/quantity.ts';
 import type { RunDesign } from '../model/runDesign.ts';
 import type { Sheet } from '../sheet/sheet.ts';
@@ -21,6 +22,7 @@ export function describeQuantities(
   fit: ProblemFit,
   weighted: WeightedRun,
   sheet: Sheet,
+  intervals: Intervals,
   degreesOfFreedom: number,
   speciation: Speciation,
 ): QuantityResult[] {
@@ -34,33 +36,44 @@ export function describeQuantities(
       : [];
   });
 
-  return design.quantities.map((quantity, q) => {
+  return design.quantities.map((quantity, q): QuantityResult => {
     const value = weighted.values[q];
-    const common = {
+    const found = intervals.quantities[q];
+    const without = {
       id: quantity.id,
       label: quantity.label,
       unit: quantity.unit,
       state: stateOf(quantity),
+      u: null,
+      interval95: null,
+      restsOn: [],
+      shares: [],
+      profile: [],
       constant: describeConstant(quantity, value, design, sheet, speciation),
     };
-    if (bindings[q].kind === 'constant')
-      return { ...common, value: numberOrNull(value), u: null, interval95: null, whyNoU: 'fixed', restsOn: [] };
+    if (found === null) return { ...without, value: numberOrNull(value), whyNoU: 'fixed' };
+    if (!(degreesOfFreedom > 0)) return { ...without, value: numberOrNull(value), whyNoU: 'no-degrees-of-freedom' };
 
-    const unit = new Float64Array(design.quantities.length);
-    unit[q] = 1;
-    const gradient = parameterGradient(weighted.run, unit, parameterCount);
-    const u = uncertaintyOf(fit.covariance, gradient);
-    if (u === null) return { ...common, value: null, u: null, interval95: null, whyNoU: 'undetermined', restsOn: [] };
-    if (!(degreesOfFreedom > 0))
-      return {
-        ...common,
-        value: numberOrNull(value),
-        u: null,
-        interval95: null,
-        whyNoU: 'no-degrees-of-freedom',
-        restsOn: [],
-      };
+    const [lower, upper] = found.interval;
+    const profile = found.profile?.points.filter(({ rise }) => Number.isFinite(rise)) ?? [];
+    const open = { ...without, value: null, constant: null, profile };
+    if (found.u === null || (lower === null && upper === null)) return { ...open, whyNoU: 'undetermined' };
+    const gradient = unitGradient(weighted, q, parameterCount);
+    const restsOn = restsOnOf(quantity, gradient, found.u);
+    if (lower === null || upper === null) return { ...open, interval95: [lower, upper], whyNoU: 'bound', restsOn };
+    return {
+      ...without,
+      value: numberOrNull(value),
+      u: numberOrNull(found.u),
+      interval95: [lower, upper],
+      whyNoU: null,
+      restsOn,
+      shares: sharesOf(fit, gradient),
+      profile,
+    };
+  });
 
+  function restsOnOf(quantity: Quantity, gradient: Float64Array, u: number): string[] {
     const restsOn: string[] = [];
     for (const { id, parameterShift } of influences) {
       let shift = 0;
@@ -74,17 +87,15 @@ export function describeQuantities(
       // The part of the variance that an error δ of unit variance passes on.
       if (covariance !== null && id !== quantity.id && covariance ** 2 > noticeableShare * u ** 2) restsOn.push(id);
     }
-    if (quantity.role.kind === 'acidity' && quantity.declaration.state === 'fitted')
-      restsOn.push(...assumedConditions(sheet));
-    return {
-      ...common,
-      value: numberOrNull(value),
-      u: numberOrNull(u),
-      interval95: covarianceInterval(value, u, degreesOfFreedom),
-      whyNoU: null,
-      restsOn,
-    };
-  });
+    const isConstant = quantity.role.kind === 'acidity' && quantity.declaration.state === 'fitted';
+    return isConstant ? [...restsOn, ...assumedConditions(sheet)] : restsOn;
+  }
+}
+
+function unitGradient(weighted: WeightedRun, quantity: number, parameterCount: number): Float64Array {
+  const unit = new Float64Array(weighted.run.bindings.length);
+  unit[quantity] = 1;
+  return parameterGradient(weighted.run, unit, parameterCount);
 }
 
 /** What the quantities of an unfitted run are: declared, or not known. */
@@ -102,6 +113,8 @@ export function describeUnfitted(design: RunDesign): QuantityResult[] {
       interval95: null,
       whyNoU: declaration.state === 'known' ? null : declared ? 'fixed' : 'not-fitted',
       restsOn: [],
+      shares: [],
+      profile: [],
       constant: null,
     };
   });

@@ -76,8 +76,26 @@ export interface QuantityResult {
   readonly whyNoU: WhyNoU | null;
   /** Ids of assumed quantities on which the value rests noticeably. */
   readonly restsOn: readonly string[];
+  /** Where its variance comes from, largest part first; the shares add up to one. Empty where there is no uncertainty. */
+  readonly shares: readonly ShareResult[];
+  /** Rise of the cost along the profile of this quantity; empty where none was taken. */
+  readonly profile: readonly ProfilePointResult[];
   /** For a pKa of the run's own substances: what it is, and the other two kinds of constant. */
   readonly constant: ConstantResult | null;
+}
+
+/** A part of the variance of a result. */
+export interface ShareResult {
+  /** "reading noise", "setting error", "dosing error", or the source or quantity whose declared uncertainty it is. */
+  readonly source: string;
+  readonly share: number;
+}
+
+/** A quantity held at a value, with everything else fitted anew. */
+export interface ProfilePointResult {
+  readonly value: number;
+  /** Rise of the weighted sum of squares above its minimum. */
+  readonly rise: number;
 }
 
 /** The three kinds of acidity constant at the temperature and ionic strength of the run. */
@@ -101,6 +119,8 @@ export interface EquivalenceResult {
   readonly volume_mL: number | null;
   readonly u: number | null;
   readonly by: 'fit' | 'derivative' | 'gran';
+  /** Where the variance of a fitted volume comes from; empty for the others. */
+  readonly shares: readonly ShareResult[];
   /** How the volume is meant: form of carbonate counted, range of points used. */
   readonly remark: string;
 }
