@@ -138,6 +138,35 @@ describe('volumesDisagree', () => {
     // The volumes lie at 2.5 and 5 mL, where the figure shows them.
     for (const { place } of doubts) expect(place.volume_mL).toBeGreaterThan(2);
   });
+
+  // Shoulders and weak steps, on which noise makes a maximum of the slope that the curve does not have.
+  const salty = { activity: 'davies', background_M: 0.1, decimals: 3 } as const;
+  it.each([
+    {
+      ...salty,
+      pKa: [4.3, 6.34],
+      chargeFullyProtonated: 1,
+      concentration_M: 0.0128,
+      end_mL: 8.32,
+      points: 71,
+      seed: 26,
+    },
+    { ...salty, pKa: [9.96], chargeFullyProtonated: 1, concentration_M: 0.0153, end_mL: 4.97, points: 65, seed: 110 },
+    { ...salty, pKa: [4.85, 6.87, 9.03], concentration_M: 0.0133, end_mL: 13, points: 76, seed: 5 },
+  ])('is silent about shoulders: pKa $pKa', ({ seed, ...shouldered }) => {
+    const result = workUpExperiment({ ...shouldered, errors: { ...usualErrors, seed } });
+    expect(doubtsOf(result, 'volumes-disagree')).toEqual([]);
+    // It is not for want of a step in the readings.
+    expect(result.equivalence.some(({ by }) => by === 'derivative')).toBe(true);
+  });
+
+  it('grants a Gran line of few points the uncertainty of its uncertainty', () => {
+    const steep = { pKa: [4.85, 6.87, 9.03], concentration_M: 0.0133, end_mL: 12.9675, points: 80, decimals: 3 };
+    for (const seed of [0, 39])
+      expect(doubtsOf(workUpExperiment({ ...steep, errors: { ...usualErrors, seed } }), 'volumes-disagree')).toEqual(
+        [],
+      );
+  });
 });
 
 describe('noiseFarAboveUsual', () => {
