@@ -1,12 +1,16 @@
-import { completeSheet, parseSheet, type Refusal, type SheetFile, sheetVersion } from '../../core/index.ts';
+import {
+  completeSheet,
+  type Outcome,
+  parseSheet,
+  type Refusal,
+  type SheetFile,
+  sheetVersion,
+} from '../../core/index.ts';
 import type { AnalysisClient } from '../worker/analysisClient.ts';
 import { changeShownRun } from './changeShownRun.ts';
-import { decidedRun } from './decidedRun.ts';
-import { fileShelf } from './fileShelf.ts';
 import { followInputs } from './followInputs.ts';
-import { changeInputs } from './inputStore.ts';
-import type { RunInput } from './inputs.ts';
 import { samples } from './samples.ts';
+import { type OpenedFile, showOpened } from './showOpened.ts';
 import { workStore } from './workStore.ts';
 
 /** A file as it is handed over; the part of the browser's File that is used. */
@@ -31,20 +35,21 @@ const emptySheet: SheetFile = { sheet: sheetVersion };
 export function createDesk(client: Pick<AnalysisClient, 'read' | 'analyse'>): Desk {
   const { stop, retry } = followInputs(client);
 
-  /** The runs of one export as inputs, or why there are none. */
-  const read = async (name: string, bytes: Uint8Array, sheet: SheetFile, isSample: boolean) => {
+  /** Reads one export, or says why it cannot be read. */
+  const read = async (
+    name: string,
+    bytes: Uint8Array,
+    sheet: SheetFile,
+    isSample: boolean,
+  ): Promise<Outcome<OpenedFile>> => {
     const reply = await client.read(bytes, name);
     if (reply.kind !== 'read') {
       const message = reply.kind === 'broken' ? reply.message : 'Reading was stopped.';
-      return { inputs: [], refusals: [unreadable(name, message)] };
+      return { ok: false, refusals: [unreadable(name, message)] };
     }
-    if (!reply.outcome.ok) return { inputs: [], refusals: reply.outcome.refusals };
-    const file = `${reply.sha256} ${name}`;
-    fileShelf.put(file, { name, bytes, runs: reply.outcome.value });
-    const inputs = reply.outcome.value.map(
-      (_, index): RunInput => ({ file, index, isSample, sheet, decisions: new Map() }),
-    );
-    return { inputs, refusals: [] };
+    if (!reply.outcome.ok) return reply.outcome;
+    const key = `${reply.sha256} ${name}`;
+    return { ok: true, value: { key, file: { name, bytes, runs: reply.outcome.value }, sheet, isSample } };
   };
 
   const open = async (files: readonly HandedFile[]) => {
@@ -53,7 +58,7 @@ export function createDesk(client: Pick<AnalysisClient, 'read' | 'analyse'>): De
     workStore.setState(({ reading }) => ({ reading: [...reading, ...names], notAccepted: null }));
     const refusals: Refusal[] = [];
     const sheets: { readonly name: string; readonly sheet: SheetFile }[] = [];
-    const opened: RunInput[] = [];
+    const opened: OpenedFile[] = [];
     const exports = files.filter(({ name }) => !isSheetName(name));
     for (const file of files.filter(({ name }) => isSheetName(name))) {
       const bytes = await bytesOf(file);
@@ -73,8 +78,8 @@ export function createDesk(client: Pick<AnalysisClient, 'read' | 'analyse'>): De
         continue;
       }
       const answer = await read(file.name, bytes, sheetFor(file.name, sheets), false);
-      opened.push(...answer.inputs);
-      refusals.push(...answer.refusals);
+      if (answer.ok) opened.push(answer.value);
+      else refusals.push(...answer.refusals);
     }
     if (opened.length > 0) showOpened(opened);
     // A sheet that comes alone is about the run on the page.
@@ -94,23 +99,14 @@ export function createDesk(client: Pick<AnalysisClient, 'read' | 'analyse'>): De
     if (!sheet.ok) throw new Error(`The sheet of ${sample.fileName} is not in order: ${sheet.refusals[0].message}`);
     workStore.setState(({ reading }) => ({ reading: [...reading, sample.fileName], notAccepted: null }));
     const answer = await read(sample.fileName, new TextEncoder().encode(sample.text), sheet.value, true);
-    if (answer.inputs.length > 0) showOpened(answer.inputs);
+    if (answer.ok) showOpened([answer.value]);
     workStore.setState(({ reading }) => ({
       reading: without(reading, [sample.fileName]),
-      notAccepted: answer.refusals.length === 0 ? null : { what: sample.fileName, refusals: answer.refusals },
+      notAccepted: answer.ok ? null : { what: sample.fileName, refusals: answer.refusals },
     }));
   };
 
   return { open, openSample, stop, retry };
-}
-
-/** Adds runs and shows the first of them. A sample makes room for whatever is opened next. */
-function showOpened(opened: readonly RunInput[]): void {
-  const first = decidedRun(opened[0]);
-  changeInputs(`opened ${first.file}`, (inputs) => {
-    const kept = inputs.runs.filter((run) => !run.isSample && !opened.some(({ file }) => file === run.file));
-    return { runs: [...kept, ...opened], shown: kept.length };
-  });
 }
 
 function isSheetName(name: string): boolean {

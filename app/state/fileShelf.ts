@@ -19,7 +19,11 @@ export const fileShelf = {
   },
   get(key: string): ShelvedFile {
     const file = files.get(key);
-    if (file === undefined) throw new Error('An input refers to a file that was never read.');
+    if (file === undefined) throw new Error('An input refers to a file that was never read, or is forgotten.');
     return file;
+  },
+  /** Forgets every file that no input refers to any more, now or by undo. */
+  keepOnly(keys: ReadonlySet<string>): void {
+    for (const key of files.keys()) if (!keys.has(key)) files.delete(key);
   },
 };

@@ -1,6 +1,7 @@
 import { beforeEach, expect, test } from 'vitest';
 import { createDesk, type Desk, type HandedFile } from '../../../app/state/createDesk.ts';
 import { decidedRun } from '../../../app/state/decidedRun.ts';
+import { fileShelf } from '../../../app/state/fileShelf.ts';
 import { inputStore, noInputs, undo } from '../../../app/state/inputStore.ts';
 import { samples } from '../../../app/state/samples.ts';
 import { toggleRow } from '../../../app/state/toggleRow.ts';
@@ -95,4 +96,13 @@ test('a row is taken out and back, and a row that a rule took out can be put in'
   undo();
   undo();
   expect(uses()).toEqual(['used', 'used', 'excluded']);
+});
+
+test('files that nothing refers to any more are forgotten; those that undo can bring back are kept', async () => {
+  await desk.open([file('a.csv', 'A')]);
+  undo();
+  expect(fileShelf.get('A a.csv').name).toBe('a.csv');
+  await desk.open([file('b.csv', 'B')]);
+  expect(() => fileShelf.get('A a.csv')).toThrow('never read');
+  expect(fileShelf.get('B b.csv').name).toBe('b.csv');
 });
