@@ -76,10 +76,8 @@ describe('the objective', () => {
     const problem = experimentProblem({ pKa: [4.8], end_mL: 3.6, errors });
     const fit = fitProblem(problem, Float64Array.of(4.8, 0.01));
     const before = objectiveOf(fit);
-    const [{ sigma }] = fit.weighted.runs;
-    sigma.forEach((s, i) => {
-      sigma[i] = 2 * s;
-    });
+    const [{ whitening, slopes }] = fit.weighted.runs;
+    whitening.set({ reading: 2 * usualErrors.uReading, setting_mL: 2 * usualErrors.uSetting_mL, dose_mL: 0 }, slopes);
     // The cost stays what it was; 60 points with twice the sigma.
     expect(objectiveOf(fit) - before).toBeCloseTo(2 * 60 * Math.LN2, 8);
   });

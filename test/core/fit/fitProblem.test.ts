@@ -68,7 +68,8 @@ describe('estimated noise', () => {
     const found = seeds.map((seed) => {
       const fit = fitted({ ...diprotic, errors: { seed, uReading: 0.008, uSetting_mL: 0.003 } }, undeclared);
       expect(fit.noise[0]).toMatchObject({ declared: false, setting_mL: 0.003 });
-      expect(fit.noise[0].reducedChiSquare).toBeCloseTo(1, 3);
+      // Restricted likelihood and the sum of squares weigh points differently: close, not equal.
+      expect(Math.abs((fit.noise[0].reducedChiSquare ?? 0) - 1)).toBeLessThan(0.2);
       return fit.noise[0].reading;
     });
     // Relative standard deviation of one 1/√(2·77) = 8 %, somewhat more beside the setting error; of the mean of
@@ -76,15 +77,17 @@ describe('estimated noise', () => {
     expect(Math.abs(mean(found) / 0.008 - 1)).toBeLessThan(0.1);
   });
 
-  it('of both is recovered where their ratio is the assumed one', () => {
+  it('of both is recovered without a word about either', () => {
     const changes: SheetChanges = { reading: { u: null }, burette: { uSetting_mL: null } };
     const found = seeds.map((seed) => {
-      const { noise } = fitted({ ...diprotic, errors: { seed, uReading: 0.01, uSetting_mL: 0.006 } }, changes);
-      expect(noise[0].setting_mL / noise[0].reading).toBeCloseTo(0.6, 10);
-      return noise[0].reading;
+      const [noise] = fitted({ ...diprotic, errors: { seed, uReading: 0.01, uSetting_mL: 0.006 } }, changes).noise;
+      expect(noise.declared).toBe(false);
+      return noise;
     });
-    // As above: 8 % each, 2 % of the mean, four of them.
-    expect(Math.abs(mean(found) / 0.01 - 1)).toBeLessThan(0.08);
+    // Eighty points share their news of two sizes, few of them on steps: 10 % and 20 % each, a quarter of that for
+    // the mean of sixteen; four of them.
+    expect(Math.abs(mean(found.map(({ reading }) => reading)) / 0.01 - 1)).toBeLessThan(0.1);
+    expect(Math.abs(mean(found.map(({ setting_mL }) => setting_mL)) / 0.006 - 1)).toBeLessThan(0.2);
   });
 
   it('is never below what the last digit hides', () => {
@@ -110,11 +113,11 @@ describe('estimated noise', () => {
 describe('weights', () => {
   it('are frozen at those of the solution: reading and slope where the curve passes the readings', () => {
     const fit = fitted({ ...diprotic, errors: { seed: 7, ...usualErrors } });
-    const [{ run, model, sigma, values }] = fit.weighted.runs;
-    model.predict(values, new Float64Array(sigma.length));
-    const slopes = new Float64Array(sigma.length);
+    const [{ run, model, whitening, values }] = fit.weighted.runs;
+    model.predict(values, new Float64Array(run.volumes.length));
+    const slopes = new Float64Array(run.volumes.length);
     model.slopesAtReadings(run.readings, slopes);
-    sigma.forEach((s, i) => {
+    whitening.sigma.forEach((s, i) => {
       // The solution stands still to 1e-4 of its uncertainty.
       expect(s / Math.hypot(0.005, 0.003 * slopes[i])).toBeCloseTo(1, 4);
     });
@@ -122,9 +125,9 @@ describe('weights', () => {
 
   it('and residuals belong to the parameters that are given', () => {
     const fit = fitted({ ...diprotic, errors: { seed: 7, ...usualErrors } });
-    const [{ run, predicted, sigma }] = fit.weighted.runs;
+    const [{ run, predicted, whitening }] = fit.weighted.runs;
     const sum = predicted.reduce((total, value, i) => {
-      const residual = (value - run.readings[i]) / sigma[i];
+      const residual = (value - run.readings[i]) / whitening.sigma[i];
       expect(fit.residuals[i]).toBeCloseTo(residual, 9);
       return total + residual ** 2;
     }, 0);

@@ -11,19 +11,21 @@ describe('residuals', () => {
     const problem = experimentProblem(acid);
     const weighted = new WeightedProblem(problem);
     const [run] = weighted.runs;
-    run.sigma.forEach((_, i) => {
-      run.sigma[i] = 0.01 * (i + 1);
-    });
+    // Points of different weight: the volume error counts along made-up slopes.
+    run.whitening.set(
+      { reading: 0.01, setting_mL: 0.02, dose_mL: 0 },
+      Float64Array.from(run.predicted, (_, i) => i),
+    );
     const residuals = new Float64Array(weighted.residualCount);
     expect(weighted.residuals(Float64Array.of(4.8, 0.01), residuals)).toBe(true);
     // Solver and simulator agree to 1e-9 in pH away from the step; the sigma of a point is 0.01 at least.
     for (const residual of residuals) expect(Math.abs(residual)).toBeLessThan(1e-5);
     expect(weighted.residuals(Float64Array.of(4.9, 0.01), residuals)).toBe(true);
     residuals.forEach((residual, i) => {
-      expect(residual).toBeCloseTo((run.predicted[i] - run.run.readings[i]) / run.sigma[i], 12);
+      expect(residual).toBeCloseTo((run.predicted[i] - run.run.readings[i]) / Math.hypot(0.01, 0.02 * i), 12);
     });
     // A higher constant means a higher curve in the buffer region.
-    expect(residuals[5]).toBeGreaterThan(1);
+    expect(residuals[5]).toBeGreaterThan(0.5);
   });
 
   it('of declared knowledge follow those of the readings, with a weight of one', () => {
@@ -66,7 +68,8 @@ describe('derivatives', () => {
       'standardisation',
     ]);
     const weighted = new WeightedProblem(problem);
-    for (const { sigma } of weighted.runs) sigma.fill(0.02);
+    for (const { whitening, slopes } of weighted.runs)
+      whitening.set({ reading: 0.02, setting_mL: 0, dose_mL: 0.001 }, slopes.fill(1));
     const { residualCount, parameterCount } = weighted;
     const at = start(problem);
     const residuals = new Float64Array(residualCount);
@@ -100,7 +103,8 @@ describe('curve and derivatives', () => {
     weighted.residuals(at, residuals);
     weighted.derivatives(at, jacobian);
     expect([weighted.curveEvaluations, weighted.derivativeEvaluations]).toEqual([1, 1]);
-    weighted.runs[0].sigma.fill(0.5);
+    const [{ whitening, slopes }] = weighted.runs;
+    whitening.set({ reading: 0.5, setting_mL: 0, dose_mL: 0 }, slopes);
     const [again, jacobianAgain] = [new Float64Array(20), new Float64Array(40)];
     weighted.residuals(at, again);
     weighted.derivatives(at, jacobianAgain);

@@ -33,7 +33,7 @@ function steps(...at: readonly number[]): StepsOfReadings {
 }
 
 function fitted(analyte: string, step: number, volume_mL: number | null): EquivalenceResult {
-  return { analyte, step, volume_mL, u: 0.01, by: 'fit', remark: '' };
+  return { analyte, step, volume_mL, u: 0.01, by: 'fit', remark: '', shares: [] };
 }
 
 function namesOf(found: StepsOfReadings, byFit: readonly EquivalenceResult[]) {
