@@ -5,6 +5,7 @@ import { constantWords } from './constantWords.ts';
 import type { IntervalScale } from './intervalScale.ts';
 import { intervalWords } from './intervalWords.ts';
 import { RestsOn } from './RestsOn.tsx';
+import { shareWords } from './shareWords.ts';
 import { whyNoNumber } from './whyNoNumber.ts';
 
 interface Props {
@@ -22,6 +23,7 @@ export function QuantityRow({ quantity, scale, labels }: Props) {
   const { id, label, unit, state, value, u, interval95, restsOn, constant } = quantity;
   const shown = formatQuantity(value, u, 6);
   const interval = intervalWords(quantity);
+  const shares = shareWords(quantity.shares, labels);
   const [low, high] = interval95 ?? [null, null];
   const decimals = shown.value.split('.')[1]?.length ?? 0;
   return (
@@ -57,6 +59,11 @@ export function QuantityRow({ quantity, scale, labels }: Props) {
       {constant !== null && (
         <tr className="remark-row">
           <td colSpan={5}>{constantWords(constant, decimals)}</td>
+        </tr>
+      )}
+      {state === 'fitted' && shares !== null && (
+        <tr className="remark-row">
+          <td colSpan={5}>variance from {shares}</td>
         </tr>
       )}
       {restsOn.length > 0 && (

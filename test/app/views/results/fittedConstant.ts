@@ -11,5 +11,7 @@ export const fittedConstant: QuantityResult = {
   interval95: [2.91, 2.96],
   whyNoU: null,
   restsOn: [],
+  shares: [],
+  profile: [],
   constant: null,
 };

@@ -8,6 +8,7 @@ const volume = (step: number, by: EquivalenceResult['by'], volume_mL: number | n
   volume_mL,
   u: 0.01,
   by,
+  shares: [],
   remark: '',
 });
 
