@@ -125,13 +125,13 @@ describe('weights', () => {
 
   it('and residuals belong to the parameters that are given', () => {
     const fit = fitted({ ...diprotic, errors: { seed: 7, ...usualErrors } });
-    const [{ run, predicted, whitening }] = fit.weighted.runs;
-    const sum = predicted.reduce((total, value, i) => {
-      const residual = (value - run.readings[i]) / whitening.sigma[i];
-      expect(fit.residuals[i]).toBeCloseTo(residual, 9);
-      return total + residual ** 2;
-    }, 0);
-    expect(sum).toBeCloseTo(fit.cost ?? 0, 6);
+    const again = new Float64Array(fit.residuals.length);
+    fit.weighted.residuals(fit.parameters, again);
+    // Memory of the last solution: rounding.
+    fit.residuals.forEach((residual, i) => {
+      expect(residual).toBeCloseTo(again[i], 8);
+    });
+    expect(fit.residuals.reduce((sum, residual) => sum + residual ** 2, 0)).toBeCloseTo(fit.cost ?? 0, 8);
   });
 });
 
