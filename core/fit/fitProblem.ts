@@ -80,12 +80,11 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
       : firstReadingNoise * (readingKind === 'mV' ? nernstSlope_mV : 1);
   });
   let estimates: readonly NoiseEstimate[] | null = null;
-  const weigh = () =>
-    runs.forEach(({ whitening, slopes }, r) => {
-      whitening.set(estimates?.[r].noise ?? noiseAt(declarations[r], readings[r]), slopes);
-    });
-  for (const { run, slopes } of runs) slopes.set(dataSlopes(run.volumes, run.readings));
-  weigh();
+  const noises = () => runs.map((_, r) => estimates?.[r].noise ?? noiseAt(declarations[r], readings[r]));
+  runs.forEach(({ run, slopes, whitening }, r) => {
+    slopes.set(dataSlopes(run.volumes, run.readings));
+    whitening.set(noiseAt(declarations[r], readings[r]), slopes);
+  });
 
   let parameters = start;
   let previousMove = Number.POSITIVE_INFINITY;
@@ -124,11 +123,12 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
     if (!usable || round === mostRounds) return finish();
 
     if (estimates === null) {
-      weighted.refreshSlopes(rough ? 1 : pace);
+      const plain = new Float64Array(weighted.residualCount);
+      weighted.writePlainResiduals(parameters, plain);
       const next = readings.map((reading, r) => {
-        const { whitening, slopes, run, predicted } = runs[r];
+        const { whitening, slopes, firstResidual } = runs[r];
         if (!(freedom[r] > 0)) return reading;
-        const misses = predicted.map((value, i) => value - run.readings[i]);
+        const misses = plain.slice(firstResidual, firstResidual + slopes.length);
         return estimateReadingNoise(declarations[r], misses, whitening, slopes, freedom[r], smallest[r]);
       });
       const noiseMoved = next.some((reading, r) => Math.abs(reading / readings[r] - 1) > noiseStandstill);
@@ -143,14 +143,13 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
       else if (stands) return finish();
     } else {
       const before = estimates;
-      weighted.refreshSlopes(1);
       const next = estimateNoise(weighted, parameters, declarations, readings, smallest);
       const corrected = next.some(({ noise }, r) => largestCorrection(noise, before[r].noise) > smallestCorrection);
       corrections++;
       if (!corrected || corrections >= mostCorrections) return finish();
       estimates = next;
     }
-    weigh();
+    weighted.weigh(noises(), rough ? 1 : pace);
   }
 }
 

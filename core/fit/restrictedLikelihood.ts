@@ -31,11 +31,7 @@ export class RestrictedLikelihood {
     this.plain = new Float64Array(residualCount * parameterCount);
     weighted.writePlainJacobian(this.plain);
     this.misses = new Float64Array(residualCount);
-    for (const { run, predicted, firstResidual } of runs)
-      predicted.forEach((value, i) => {
-        this.misses[firstResidual + i] = value - run.readings[i];
-      });
-    weighted.writeKnowledge(parameters, this.misses);
+    weighted.writePlainResiduals(parameters, this.misses);
     this.columns = new Float64Array(residualCount * (parameterCount + 1));
     this.whitenings = runs.map(({ run }) => new Whitening(run.volumes));
     this.result = {

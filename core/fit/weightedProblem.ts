@@ -2,7 +2,15 @@ import { bindingTerms, boundValue } from '../model/binding.ts';
 import type { Problem, ProblemRun } from '../model/problem.ts';
 import { RunModel } from '../model/runModel.ts';
 import type { LeastSquaresProblem } from './leastSquaresProblem.ts';
+import type { Noise } from './noise.ts';
 import { Whitening } from './whitening.ts';
+
+/**
+ * A point whose whole uncertainty is this many times that of its reading is
+ * compared by volume. Either way is right to first order; by volume, the
+ * parameters come in straight where the curve is steep.
+ */
+const byVolumeFrom = 1.2;
 
 /** One run inside a weighted problem; arrays have one entry per point unless said otherwise. */
 export interface WeightedRun {
@@ -12,9 +20,9 @@ export interface WeightedRun {
   readonly firstResidual: number;
   /** Values of all quantities at the parameters evaluated last. */
   readonly values: Float64Array;
-  /** Predicted readings there. */
+  /** Predicted readings there; of points that are compared by volume, to first order from their readings. */
   readonly predicted: Float64Array;
-  /** d reading / d burette volume as it weighs the volume errors, unit/mL; see `refreshSlopes`. */
+  /** d reading / d burette volume where the curve passes the readings, unit/mL; see `weigh`. */
   readonly slopes: Float64Array;
   /** Covariance of its residuals; set by whoever weighs the points. */
   readonly whitening: Whitening;
@@ -87,19 +95,24 @@ export class WeightedProblem implements LeastSquaresProblem {
     const kept = this.isKept(parameters);
     if (!kept) this.curveEvaluations++;
     for (let r = 0; r < this.runs.length; r++) {
-      const { run, model, values, predicted, whitening, firstResidual } = this.runs[r];
+      const { run, values, predicted } = this.runs[r];
       for (let q = 0; q < values.length; q++) values[q] = boundValue(run.bindings[q], parameters);
       if (kept) predicted.set(this.keptCurves[r]);
-      else if (!model.predict(values, predicted)) return false;
-      for (let i = 0; i < predicted.length; i++) residuals[firstResidual + i] = predicted[i] - run.readings[i];
-      whitening.apply(residuals, firstResidual);
+      else if (!this.predict(this.runs[r])) return false;
     }
-    this.writeKnowledge(parameters, residuals);
+    this.writePlainResiduals(parameters, residuals);
+    for (const { whitening, firstResidual } of this.runs) whitening.apply(residuals, firstResidual);
     return true;
   }
 
-  /** Writes the residuals of declared knowledge behind those of the readings. */
-  writeKnowledge(parameters: Float64Array, residuals: Float64Array): void {
+  /** Writes the residuals before whitening, curve minus reading, at the parameters asked last, and those of knowledge. */
+  writePlainResiduals(parameters: Float64Array, residuals: Float64Array): void {
+    for (const { run, predicted, firstResidual } of this.runs)
+      for (let i = 0; i < predicted.length; i++) residuals[firstResidual + i] = predicted[i] - run.readings[i];
+    this.writeKnowledge(parameters, residuals);
+  }
+
+  private writeKnowledge(parameters: Float64Array, residuals: Float64Array): void {
     this.knowledge.forEach((parameter, k) => {
       residuals[this.readingCount + k] = parameters[parameter];
     });
@@ -112,6 +125,7 @@ export class WeightedProblem implements LeastSquaresProblem {
       this.runs.forEach(({ model, predicted }, r) => {
         const { wanted, derivatives, slopes } = this.moving[r];
         model.differentiate(wanted, derivatives, slopes);
+        this.straighten(r, derivatives, slopes);
         this.keptCurves[r].set(predicted);
       });
       this.keptParameters.set(parameters);
@@ -120,6 +134,24 @@ export class WeightedProblem implements LeastSquaresProblem {
     for (const { whitening, firstResidual } of this.runs)
       for (let j = 0; j < this.parameterCount; j++) whitening.apply(jacobian, j * this.residualCount + firstResidual);
     return true;
+  }
+
+  /** Predicted readings; of a point met at its reading, by the difference of its volumes times its slope. */
+  private predict({ run, model, values, predicted, slopes }: WeightedRun): boolean {
+    if (!model.predict(values, predicted)) return false;
+    for (let i = 0; i < predicted.length; i++) predicted[i] += slopes[i] * (run.volumes[i] - model.evaluatedAt[i]);
+    return true;
+  }
+
+  /** Turns derivatives where a point was met at its reading into those of its predicted reading. */
+  private straighten(r: number, derivatives: Float64Array, slopesThere: Float64Array): void {
+    const { run, model, slopes } = this.runs[r];
+    const count = slopes.length;
+    for (let i = 0; i < count; i++) {
+      if (model.evaluatedAt[i] === run.volumes[i]) continue;
+      const factor = slopes[i] / slopesThere[i];
+      for (let at = i; at < derivatives.length; at += count) derivatives[at] *= factor;
+    }
   }
 
   /** Writes the derivatives of the readings, not whitened, at the parameters differentiated last, with the rows of knowledge. */
@@ -141,20 +173,46 @@ export class WeightedProblem implements LeastSquaresProblem {
   }
 
   /**
-   * Takes the slopes that weigh the volume errors from the curve asked last.
+   * Weighs the points anew: takes the slopes from the curve asked last and
+   * sets the covariance of the residuals.
    *
+   * Points whose volume error outweighs that of the reading are compared by
+   * volume from now on, as far as the electrode allows: where the curve is
+   * steep and bent, the volume that belongs to a reading follows the
+   * parameters in a straight line, and the reading at a volume does not. When
+   * this stands still, the cost is that of orthogonal distance regression.
+   *
+   * @param noises of every run
    * @param pace 1 takes the new slopes, less goes part of the way to them
    */
-  refreshSlopes(pace: number): void {
-    for (const { run, model, slopes } of this.runs) {
+  weigh(noises: readonly Noise[], pace: number): void {
+    this.runs.forEach(({ run, model, slopes, whitening }, r) => {
       const before = slopes.slice();
       model.slopesAtReadings(run.readings, slopes);
-      if (pace === 1) continue;
-      for (let i = 0; i < slopes.length; i++) {
-        const ratio = Math.abs(slopes[i] / before[i]);
-        if (ratio > 0 && Number.isFinite(ratio)) slopes[i] = Math.sign(slopes[i]) * Math.abs(before[i]) * ratio ** pace;
-      }
-    }
+      if (pace < 1)
+        for (let i = 0; i < slopes.length; i++) {
+          const ratio = Math.abs(slopes[i] / before[i]);
+          if (ratio > 0 && Number.isFinite(ratio))
+            slopes[i] = Math.sign(slopes[i]) * Math.abs(before[i]) * ratio ** pace;
+        }
+      this.setWeights(r, noises[r], whitening);
+    });
+    this.keptParameters.fill(Number.NaN);
+  }
+
+  /** Takes slopes over from another weighted problem of the same runs, with the noise given. */
+  weighLike(other: WeightedProblem, noises: readonly Noise[]): void {
+    this.runs.forEach(({ slopes, whitening }, r) => {
+      slopes.set(other.runs[r].slopes);
+      this.setWeights(r, noises[r], whitening);
+    });
+    this.keptParameters.fill(Number.NaN);
+  }
+
+  private setWeights(run: number, noise: Noise, whitening: Whitening): void {
+    const { model, slopes } = this.runs[run];
+    whitening.set(noise, slopes);
+    model.meetReadings(whitening.sigma.map((sigma) => (sigma > byVolumeFrom * noise.reading ? 1 : 0)));
   }
 
   private isKept(parameters: Float64Array): boolean {

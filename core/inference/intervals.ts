@@ -74,10 +74,7 @@ export function intervalsOf(fit: ProblemFit, index: number, pHRange: readonly [n
 /** The minimum with its weights, in a problem of its own, so that profiles leave the fit as it is. */
 export function freeze(fit: ProblemFit): FrozenMinimum & { readonly covariance: CovarianceEstimate } {
   const problem = new WeightedProblem(fit.weighted.problem);
-  problem.runs.forEach(({ whitening, slopes }, r) => {
-    slopes.set(fit.weighted.runs[r].slopes);
-    whitening.set(fit.noise[r], slopes);
-  });
+  problem.weighLike(fit.weighted, fit.noise);
   const residuals = new Float64Array(problem.residualCount);
   if (!problem.residuals(fit.parameters, residuals)) throw new Error('the curve of a fit can be computed again');
   const cost = residuals.reduce((sum, r) => sum + r * r, 0);

@@ -1,6 +1,7 @@
 import { daviesFunction } from '../chemistry/davies.ts';
 import { Equilibrium } from '../chemistry/equilibrium.ts';
 import { anionsIndex, cationsIndex, firstSystem } from '../chemistry/mixture.ts';
+import { InverseCurve } from './inverseCurve.ts';
 import { ReadingScale } from './readingScale.ts';
 import type { RunDesign } from './runDesign.ts';
 import { Vessels } from './vessels.ts';
@@ -29,12 +30,18 @@ export class RunModel {
   readonly logHydrogen: Float64Array;
   readonly ionicStrength: Float64Array;
 
+  /** Burette volume at which every point was evaluated last, mL: its own, or for points met at their reading that of the curve. */
+  readonly evaluatedAt: Float64Array;
+
   private readonly vessels: Vessels;
+  private readonly inverse: InverseCurve;
   private readonly scale: ReadingScale;
   private readonly mixture: Float64Array;
   private readonly startReadings: Float64Array | null;
   private values: Float64Array;
   private started = false;
+  /** 1 for points that are met at their measured reading. */
+  private readonly met: Uint8Array;
 
   /**
    * @param volumes burette readings, mL
@@ -54,6 +61,19 @@ export class RunModel {
     this.logHydrogen = new Float64Array(volumes.length);
     this.ionicStrength = new Float64Array(volumes.length);
     this.values = new Float64Array(design.quantities.length);
+    this.evaluatedAt = volumes.slice();
+    this.met = new Uint8Array(volumes.length);
+    this.inverse = new InverseCurve(this.equilibrium.balance, this.vessels, this.mixture);
+  }
+
+  /**
+   * From now on, evaluates the points marked 1 not at their own volume but
+   * where the curve passes their measured reading, as far as there is such a
+   * volume; `evaluatedAt` says where each point was evaluated.
+   */
+  meetReadings(points: ArrayLike<number>): void {
+    if (this.startReadings === null) throw new Error('without readings there is nothing to meet');
+    this.met.set(points);
   }
 
   /** Forgets the last solutions, so that the next prediction starts cold. */
@@ -78,6 +98,11 @@ export class RunModel {
     const activityTerm = this.design.scale === 'activity' && this.design.coefficientA > 0;
     const lnA = equilibrium.balance.lnA;
     for (let i = 0; i < volumes.length; i++) {
+      if (this.met[i] === 1 && this.startReadings !== null && this.meet(i, this.startReadings[i])) {
+        readings[i] = this.startReadings[i];
+        continue;
+      }
+      this.evaluatedAt[i] = volumes[i];
       vessels.mix(vessels.gain * volumes[i], mixture);
       if (!equilibrium.solve(mixture, logHydrogen[i], ionicStrength[i])) {
         this.started = false;
@@ -98,22 +123,23 @@ export class RunModel {
   }
 
   /**
-   * Writes the derivatives of the readings at the values predicted last.
+   * Writes the derivatives of the readings at the values predicted last, each
+   * at the volume where its point was evaluated.
    *
    * @param wanted positions of the quantities to differentiate by
    * @param derivatives d reading_i / d wanted_j at [j · points + i], written
    * @param slopes d reading / d burette volume per point, unit/mL, written
    */
   differentiate(wanted: Int32Array, derivatives: Float64Array, slopes: Float64Array): void {
-    const { equilibrium, vessels, volumes, mixture, scale } = this;
+    const { equilibrium, vessels, evaluatedAt, mixture, scale } = this;
     const { balance, byComposition, byLogKa } = equilibrium;
     const { sample, titrant, gain } = vessels;
     const roles = this.design.quantities.map((quantity) => quantity.role);
-    const count = volumes.length;
+    const count = evaluatedAt.length;
     const activityTerm = this.design.scale === 'activity' && balance.davies;
     const components = mixture.length;
     for (let i = 0; i < count; i++) {
-      const volume = gain * volumes[i];
+      const volume = gain * evaluatedAt[i];
       const total = vessels.mix(volume, mixture);
       const x = this.logHydrogen[i];
       const ionic = this.ionicStrength[i];
@@ -167,7 +193,7 @@ export class RunModel {
             derivatives[at] = perWater;
             break;
           case 'buretteGain':
-            derivatives[at] = perVolume * volumes[i];
+            derivatives[at] = perVolume * evaluatedAt[i];
             break;
           case 'ionProduct':
             derivatives[at] = -Math.LN10 * (equilibrium.byLogKw + scale.junctionHydroxide * hydroxide);
@@ -199,11 +225,11 @@ export class RunModel {
    * the volume changes tenfold with the smallest change of the constants.
    */
   slopesAtReadings(readings: Float64Array, slopes: Float64Array): void {
-    const { equilibrium, vessels, volumes, mixture, scale } = this;
+    const { equilibrium, vessels, evaluatedAt, mixture, scale } = this;
     const { balance, byComposition } = equilibrium;
     const activity = this.design.scale === 'activity' && balance.davies;
-    for (let i = 0; i < volumes.length; i++) {
-      const total = vessels.mix(vessels.gain * volumes[i], mixture);
+    for (let i = 0; i < evaluatedAt.length; i++) {
+      const total = vessels.mix(vessels.gain * evaluatedAt[i], mixture);
       const ionic = this.ionicStrength[i];
       const activityTerm = activity ? balance.lnA * daviesFunction(ionic) : 0;
       const read = activityTerm - scale.negativeLog(readings[i]) * Math.LN10;
@@ -215,6 +241,18 @@ export class RunModel {
       for (let c = 0; c < mixture.length; c++) slope += (byComposition[c] * (vessels.titrant[c] - mixture[c])) / total;
       slopes[i] = slope * vessels.gain;
     }
+  }
+
+  /** Evaluates a point where the curve passes a reading; false where it never does. */
+  private meet(i: number, reading: number): boolean {
+    const { inverse, scale, vessels } = this;
+    if (scale.hasJunction) return false;
+    if (!inverse.solve(scale.negativeLog(reading), this.design.scale === 'activity', this.ionicStrength[i]))
+      return false;
+    this.evaluatedAt[i] = inverse.volume / vessels.gain;
+    this.logHydrogen[i] = inverse.logHydrogen;
+    this.ionicStrength[i] = inverse.ionicStrength;
+    return true;
   }
 
   /** Starts every point from its measured reading. */
