@@ -63,7 +63,7 @@ export function QuantityRow({ quantity, scale, labels }: Props) {
       )}
       {state === 'fitted' && shares !== null && (
         <tr className="remark-row">
-          <td colSpan={5}>variance from {shares}</td>
+          <td colSpan={5}>variance: {shares}</td>
         </tr>
       )}
       {restsOn.length > 0 && (

@@ -12,10 +12,10 @@ test('the largest parts of a variance are named, the small ones told together', 
     { source: 'bottle', share: 0.03 },
     { source: 'offset', share: 0.01 },
   ];
-  expect(plain(shareWords(shares, labels))).toBe('reading noise 60 %, burette gain 30 %, pipette 6 %, others 4 %');
+  expect(plain(shareWords(shares, labels))).toBe('60 % reading noise, 30 % burette gain, 6 % pipette, 4 % others');
 });
 
 test('a single part is all of it, and no uncertainty has no parts', () => {
-  expect(plain(shareWords([{ source: 'reading noise', share: 1 }], labels))).toBe('reading noise 100 %');
+  expect(plain(shareWords([{ source: 'reading noise', share: 1 }], labels))).toBe('100 % reading noise');
   expect(shareWords([], labels)).toBe(null);
 });
