@@ -34,8 +34,8 @@ export interface Experiment {
   readonly decimals?: number;
 }
 
-export const sampleVolume_mL = 25;
-export const titrant_M = 0.1;
+const sampleVolume_mL = 25;
+const titrant_M = 0.1;
 /** Noise of a good automatic titrator, as the sheets of these experiments declare it. */
 export const usualErrors = { uReading: 0.005, uSetting_mL: 0.003 } as const;
 
