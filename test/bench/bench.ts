@@ -1,7 +1,8 @@
 import { curveBench } from './curveBench.ts';
 import { engineBench } from './engineBench.ts';
 import { fitBench } from './fitBench.ts';
+import { peerBench } from './peerBench.ts';
 import { readBench } from './readBench.ts';
 
 // Counts are the same on every machine; times are medians with their range over rounds, and only their ratios compare.
-for (const bench of [curveBench, fitBench, engineBench, readBench]) console.log(`${bench().join('\n')}\n`);
+for (const bench of [curveBench, fitBench, engineBench, readBench, peerBench]) console.log(`${bench().join('\n')}\n`);

@@ -1,5 +1,5 @@
-import { buildProblem, type Problem } from '../../core/model/problem.ts';
 import { debyeHueckelA } from '../../core/chemistry/debyeHueckel.ts';
+import { buildProblem, type Problem } from '../../core/model/problem.ts';
 import { completeSheet } from '../../core/sheet/completeSheet.ts';
 import type { SheetFile } from '../../core/sheet/sheetFile.ts';
 import { celsius } from '../../core/units/temperature.ts';
@@ -9,7 +9,8 @@ import { simulateRun } from '../simulator/simulateRun.ts';
 /** Citric acid with sodium hydroxide; constants from test/reference/pka-handbook.json. */
 export const benchTruth = { pKa: [3.128, 4.761, 6.396], concentration_M: 0.015, offset: 0.004 } as const;
 
-const sheet: SheetFile = {
+/** All declared but the constants, the concentration and the offset, which are fitted. */
+export const benchSheet: SheetFile = {
   sheet: 1,
   sample: {
     volume_mL: 25,
@@ -47,7 +48,7 @@ export function benchProblem(points: number): Problem {
     reading: { kind: 'pH', scale: 'activity', offset: benchTruth.offset },
     errors: { seed: 42, uReading: 0.005, uSetting_mL: 0.003 },
   });
-  const complete = completeSheet(sheet, { readingKind: 'pH', titrantKind: 'base', groupsIfOpen: 3 });
+  const complete = completeSheet(benchSheet, { readingKind: 'pH', titrantKind: 'base', groupsIfOpen: 3 });
   if (!complete.ok) throw new Error(JSON.stringify(complete.refusals));
   const problem = buildProblem([
     { sheet: complete.value, volumes: simulated.volumes_mL, readings: simulated.readings },

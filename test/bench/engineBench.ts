@@ -36,17 +36,13 @@ export function engineBench(): string[] {
   }, 50);
   const x = Array.from({ length: parameters }, (_, i) => i);
   const library = timeOf(() => {
-    levenbergMarquardt(
-      { x, y: new Float64Array(parameters) },
-      (w: number[]) => (i: number) => w[i] + 0.1,
-      {
-        initialValues: new Array(parameters).fill(0),
-        damping: 0.01,
-        maxIterations: 1,
-        errorTolerance: Number.NEGATIVE_INFINITY,
-        jacobianFunction: () => (i: number) => x.map((j) => (i === j ? 1 : 0)),
-      },
-    );
+    levenbergMarquardt({ x, y: new Float64Array(parameters) }, (w: number[]) => (i: number) => w[i] + 0.1, {
+      initialValues: new Array(parameters).fill(0),
+      damping: 0.01,
+      maxIterations: 1,
+      errorTolerance: Number.NEGATIVE_INFINITY,
+      jacobianFunction: () => (i: number) => x.map((j) => (i === j ? 1 : 0)),
+    });
   }, 500);
   return [
     `Engine without a model, ${points} residuals, ${parameters} parameters`,

@@ -6,7 +6,7 @@ import { benchProblem } from './benchRun.ts';
 import { printTiming, timeOf } from './timeOf.ts';
 
 /** The first start proposed, as parameters, without choosing among candidates. */
-function firstStart(problem: Problem): Float64Array {
+export function firstStart(problem: Problem): Float64Array {
   const [run] = problem.runs;
   const [values] = startingValues(run);
   const start = new Float64Array(problem.parameters.length);

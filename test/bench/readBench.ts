@@ -14,12 +14,20 @@ export function readBench(): string[] {
     lines.push(line);
   }
   const bytes = new TextEncoder().encode(lines.join('\n'));
-  const whole = timeOf(() => {
-    if (!readRuns(bytes, 'export.csv').ok) throw new Error('the file of the benchmark cannot be read');
-  }, 1, 5);
-  const splitting = timeOf(() => {
-    Papa.parse(new TextDecoder().decode(bytes), { delimiter: ';' });
-  }, 1, 5);
+  const whole = timeOf(
+    () => {
+      if (!readRuns(bytes, 'export.csv').ok) throw new Error('the file of the benchmark cannot be read');
+    },
+    1,
+    5,
+  );
+  const splitting = timeOf(
+    () => {
+      Papa.parse(new TextDecoder().decode(bytes), { delimiter: ';' });
+    },
+    1,
+    5,
+  );
   return [
     `Reading ${(bytes.length / 1e6).toFixed(1)} MB, ${lines.length} lines`,
     `  bytes to runs                               ${printTiming(whole)}`,
