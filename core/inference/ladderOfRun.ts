@@ -1,37 +1,31 @@
-import { daviesFunction } from '../chemistry/davies.ts';
 import { dataSlopes } from '../fit/dataSlopes.ts';
 import { fitProblem } from '../fit/fitProblem.ts';
 import { endings } from '../fit/leastSquaresEnding.ts';
 import { declaredNoise, type Noise, noiseAt } from '../fit/noise.ts';
-import { ReadingScale } from '../model/readingScale.ts';
 import type { Sheet } from '../sheet/sheet.ts';
 import { ladderAgainst } from './ladderAgainst.ts';
 import { chooseRung, corrected, type JudgedRung, judgeRungs } from './ladderChoice.ts';
 import { ladderNesting } from './ladderNesting.ts';
+import { type ReadingsReach, readingsReach } from './ladderReach.ts';
 import { type CommonNoise, LadderRung } from './ladderRung.ts';
 import { type LadderSheets, ladderSheets, type RungKind } from './ladderSheets.ts';
-import {
-  limitOf,
-  type ReadingsReach,
-  startFromOutermostGroup,
-  startsBesideReadings,
-  startsFromReadings,
-} from './ladderStarts.ts';
+import { limitOf, startFromOutermostGroup, startsBesideReadings, startsFromReadings } from './ladderStarts.ts';
 
 /** Points on which rungs are compared; a longer run is thinned to as many. */
 const comparedPoints = 120;
-/** Starts of one rung that are fitted, the nearest to the readings first. */
-const fittedStarts = { plain: 3, varied: 2 } as const;
+/** Starts of each kind that are fitted for one rung, the nearest to the readings first. */
+const fittedStarts = { fromReadings: 3, sameGroups: 1, groupAdded: 1 } as const;
 /** Groups added one by one without any use before the climb ends. */
 const rungsWithoutGain = 2;
+/** Groups may stand in for carbonate and an excess: so many fewer are tried with these. */
+const variedBelow = 2;
 /** Part of a cost that a larger rung may lie above a smaller one before it is fitted from there: rounding. */
 const sameCost = 1e-9;
 /** Reading noise before the readings have said anything, in pH. */
 const firstReadingNoise = 0.01;
-/** Times the common noise is taken from a rung that turns out to be better supported. */
-const mostReferences = 3;
-/** Ionic strength for the shift of constants where the run has no say yet, mol/L. */
-const usualIonicStrength = 0.05;
+/** Times the common noise is taken from a rung that turns out to be better supported, by how much of AICc at least. */
+const mostReferences = 2;
+const betterReference = 6;
 
 /** All rungs of a run on one common noise, and the one that can be defended. */
 export interface Ladder {
@@ -61,21 +55,26 @@ export function* ladderOfRun(
   volumes: Float64Array,
   readings: Float64Array,
 ): Generator<number, Ladder | null> {
-  const sheets = ladderSheets(sheet);
+  // What is left of a thinned run has gathered the errors of all doses between two points.
+  const dosesPerPoint = Math.max(1, (volumes.length - 1) / (comparedPoints - 1));
+  const { burette } = sheet;
+  const uDose = { ...burette.doseUncertainty, value: burette.doseUncertainty.value * Math.sqrt(dosesPerPoint) };
+  const sheets = ladderSheets({ ...sheet, burette: { ...burette, doseUncertainty: uDose } });
   const climb = new Climb(sheets, thinned(volumes), thinned(readings));
   yield* climb.plain();
   if (climb.rungs.length === 0) return null;
   yield* climb.varied();
-  climb.settleNoise();
-  const judged = judgeRungs(climb.rungs, sheets, (rung) => ladderAgainst(rung, sheets, climb.reach));
+  climb.settle();
+  const judged = judgeRungs(climb.rungs, sheets, (rung) => ladderAgainst(rung, sheets));
   return { rungs: judged, chosen: chooseRung(judged, sheets), sheets, curveEvaluations: climb.curveEvaluations };
 }
 
 function thinned(values: Float64Array): Float64Array {
   const count = values.length;
   if (count <= comparedPoints) return values;
-  return Float64Array.from({ length: comparedPoints }, (_, k) =>
-    values[Math.round((k * (count - 1)) / (comparedPoints - 1))],
+  return Float64Array.from(
+    { length: comparedPoints },
+    (_, k) => values[Math.round((k * (count - 1)) / (comparedPoints - 1))],
   );
 }
 
@@ -96,14 +95,14 @@ class Climb {
     this.sheets = sheets;
     this.volumes = volumes;
     this.readings = readings;
-    const first = this.build({ groups: Math.max(1, sheets.fewest), carbonate: false, excess: false });
+    const first = this.build(sheets.plain(Math.max(1, sheets.fewest)));
     const { run } = first.run;
     this.acid = run.design.titrantKind === 'acid';
     const unit = run.design.readingKind === 'mV' ? run.design.nernstSlope_mV : 1;
     const declaration = declaredNoise(run.sheet, run.design.nernstSlope_mV);
     const reading = declaration.kind === 'declared' ? declaration.reading : firstReadingNoise * unit;
     this.noise = { noise: noiseAt(declaration, reading), slopes: dataSlopes(volumes, readings) };
-    this.reach = reachOf(first);
+    this.reach = readingsReach(first);
   }
 
   get curveEvaluations(): number {
@@ -117,11 +116,7 @@ class Climb {
     let bestGroups = sheets.fewest;
     for (let groups = sheets.fewest; groups <= sheets.largest; groups++) {
       yield groups;
-      const rung = this.climbTo({
-        groups,
-        carbonate: sheets.carbonate === 'always',
-        excess: sheets.excess === 'always' || groups === 0,
-      });
+      const rung = this.climbTo(sheets.plain(groups));
       if (rung === null) break;
       const support = roughCriterion(rung);
       if (support < best) {
@@ -132,25 +127,40 @@ class Climb {
     this.settleNoise();
   }
 
-  /** Carbonate and excess, from no group to one more than is supported best. */
+  /** Carbonate and excess about the rung that is supported best, until that one stays. */
   *varied(): Generator<number, void> {
     const { sheets } = this;
-    const carbonates = sheets.carbonate === 'open' ? [false, true] : [sheets.carbonate === 'always'];
-    let highest = Math.min(sheets.largest, this.bestSupported().kind.groups + 1);
-    for (let groups = sheets.fewest; groups <= highest; groups++) {
-      yield groups;
-      const excesses = sheets.excess === 'open' && groups > 0 ? [false, true] : [sheets.excess === 'always' || groups === 0];
-      for (const carbonate of carbonates)
-        for (const excess of excesses) this.climbTo({ groups, carbonate, excess });
-      highest = Math.max(highest, Math.min(sheets.largest, this.bestSupported().kind.groups + 1));
+    const carbonates = sheets.carbonate === 'open' ? [false, true] : [sheets.plain(1).carbonate];
+    let lowest = sheets.largest;
+    let highest = sheets.fewest - 1;
+    for (;;) {
+      const { groups: best } = this.bestSupported().kind;
+      const from = Math.max(sheets.fewest, best - variedBelow);
+      const to = Math.min(sheets.largest, best + 1);
+      if (from >= lowest && to <= highest) break;
+      lowest = Math.min(lowest, from);
+      highest = Math.max(highest, to);
+      for (let groups = lowest; groups <= highest; groups++) {
+        yield groups;
+        const excesses = sheets.excess === 'open' && groups > 0 ? [false, true] : [sheets.plain(groups).excess];
+        for (const carbonate of carbonates) for (const excess of excesses) this.climbTo({ groups, carbonate, excess });
+      }
     }
   }
 
+  /** Puts the ladder on its final noise and in order: no rung lies above one that it contains. */
+  settle(): void {
+    this.settleNoise();
+    this.rungs.sort((a, b) => a.fitted - b.fitted);
+    for (const rung of this.rungs) this.keepBelow(rung);
+  }
+
   /** Takes the common noise from the best supported rung, again where that changes which one it is. */
-  settleNoise(): void {
+  private settleNoise(): void {
     for (let round = 0; round < mostReferences; round++) {
       const best = this.bestSupported();
-      if (best === this.reference || best.end === null) return;
+      const gain = this.reference === null ? Infinity : roughCriterion(this.reference) - roughCriterion(best);
+      if (best.end === null || !(gain > betterReference)) return;
       const fit = fitProblem(best.problem, best.end.parameters);
       this.evaluationsOfReferences += fit.weighted.curveEvaluations;
       this.reference = best;
@@ -189,38 +199,50 @@ class Climb {
     const rung = this.build(kind);
     if (corrected(rung.fitted, rung.points) === null) return null;
     rung.weigh(this.noise);
-    const starts = this.startsOf(rung)
-      .map((start) => ({ start, distance: rung.distance(start) }))
-      .filter(({ distance }) => distance < Number.POSITIVE_INFINITY)
-      .sort((a, b) => a.distance - b.distance);
-    const isPlain = this.isPlain(kind);
-    for (const { start } of starts.slice(0, isPlain ? fittedStarts.plain : fittedStarts.varied)) rung.fitFrom(start);
+    for (const starts of this.startsOf(rung)) {
+      const ranked = starts.from
+        .map((start) => ({ start, distance: rung.distance(start) }))
+        .filter(({ distance }) => distance < Number.POSITIVE_INFINITY)
+        .sort((a, b) => a.distance - b.distance);
+      for (const { start } of ranked.slice(0, starts.fitted)) rung.fitFrom(start);
+    }
     this.rungs.push(rung);
     this.keepBelow(rung);
     return rung.end === null ? null : rung;
   }
 
   private isPlain({ groups, carbonate, excess }: RungKind): boolean {
-    const { sheets } = this;
-    return carbonate === (sheets.carbonate === 'always') && excess === (sheets.excess === 'always' || groups === 0);
+    const plain = this.sheets.plain(groups);
+    return carbonate === plain.carbonate && excess === plain.excess;
   }
 
-  private startsOf(rung: LadderRung): Float64Array[] {
+  /**
+   * Kinds of starts, each with the number of them that is worth fitting. The
+   * nearest of one kind would hide those of another, which lead elsewhere.
+   */
+  private startsOf(rung: LadderRung): { from: Float64Array[]; fitted: number }[] {
     const { kind } = rung;
-    const starts: Float64Array[] = [];
+    const sameGroups: Float64Array[] = [];
+    const groupAdded: Float64Array[] = [];
     for (const smaller of this.rungs) {
       if (smaller.end === null) continue;
       const nesting = ladderNesting(smaller, rung, this.sheets);
-      if (nesting !== null) starts.push(limitOf(nesting, smaller, rung, this.reach));
-      if (nesting?.kind === 'group-out-of-reach') starts.push(...startsBesideReadings(smaller, rung, this.reach));
+      if (nesting === null) continue;
+      const limit = limitOf(nesting, smaller, rung, this.reach);
+      if (nesting.kind === 'same-groups') sameGroups.push(limit);
+      else groupAdded.push(limit);
+      if (nesting.kind === 'group-out-of-reach') groupAdded.push(...startsBesideReadings(smaller, rung, this.reach));
     }
     if (kind.excess && kind.groups > 0) {
       const richer = this.find({ ...kind, groups: kind.groups + 1, excess: false });
       if (richer !== undefined && richer.end !== null)
-        starts.push(startFromOutermostGroup(richer, rung, this.acid));
+        sameGroups.push(startFromOutermostGroup(richer, rung, this.acid));
     }
-    if (this.isPlain(kind)) starts.push(...startsFromReadings(rung));
-    return starts;
+    return [
+      { from: this.isPlain(kind) ? startsFromReadings(rung) : [], fitted: fittedStarts.fromReadings },
+      { from: sameGroups, fitted: fittedStarts.sameGroups },
+      { from: groupAdded, fitted: fittedStarts.groupAdded },
+    ];
   }
 
   /** Fits a rung from every rung contained in it that has a lower cost, so that none has. */
@@ -246,18 +268,4 @@ function scaled(noise: Noise, factor: number): Noise {
     setting_mL: noise.setting_mL * factor,
     dose_mL: noise.dose_mL * factor,
   };
-}
-
-/** Where the readings lie on the scale of p[H⁺]. */
-function reachOf(rung: LadderRung): ReadingsReach {
-  const { run } = rung.run;
-  const { design } = run;
-  const scale = new ReadingScale(design);
-  scale.take(Float64Array.from(design.quantities, ({ declaration, role }) => nominal(declaration, role.kind)));
-  const activityTerm =
-    design.scale === 'activity' && design.coefficientA > 0
-      ? design.coefficientA * daviesFunction(usualIonicStrength)
-      : 0;
-  const values = Array.from(run.readings, (reading) => scale.negativeLog(reading) - activityTerm);
-  return { lowest: Math.min(...values), highest: Math.max(...values), ionicStrength: usualIonicStrength };
 }

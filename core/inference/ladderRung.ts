@@ -8,10 +8,10 @@ import type { LadderSheets, RungSheet } from './ladderSheets.ts';
 const constantStepLimit = 2;
 /** No declared knowledge moves by more than this in one step, in standard uncertainties. */
 const knowledgeStepLimit = 4;
-/** Costs are compared to a few units; this much of a cost is nothing beside them. */
-const costTolerance = 1e-7;
+/** Costs are compared to a few units; this part of a cost that matters is nothing beside them. */
+const costTolerance = 1e-5;
 /** Steps of one fit: a constant on its way out of the readings need not arrive. */
-const iterationLimit = 30;
+const iterationLimit = 20;
 /** Standard uncertainties beyond which a miss counts for less when starts are compared. */
 const broadMiss = 10;
 
@@ -76,6 +76,22 @@ export class LadderRung {
   /** Number of readings. */
   get points(): number {
     return this.weighted.readingCount;
+  }
+
+  /** Root mean square of the whitened readings at the end; 1 where the rung explains them to their noise. */
+  get weightedResidual(): number | null {
+    if (this.end === null) return null;
+    let sum = 0;
+    for (let i = 0; i < this.points; i++) sum += this.end.residuals[i] ** 2;
+    return Math.sqrt(sum / this.points);
+  }
+
+  /** Root mean square of curve minus reading at the end, in the unit of the reading. */
+  get residual(): number | null {
+    if (this.end === null || !this.weighted.residuals(this.end.parameters, this.scratch)) return null;
+    const { predicted, run } = this.run;
+    const sum = predicted.reduce((total, value, i) => total + (value - run.readings[i]) ** 2, 0);
+    return Math.sqrt(sum / this.points);
   }
 
   /** Takes up other weights; what was found under the old ones is only a start. */

@@ -30,6 +30,8 @@ export interface LadderSheets {
   /** Smallest number of groups: those whose constants are declared by number stay. */
   readonly fewest: number;
   readonly largest: number;
+  /** What is fitted with so many groups if nothing is asked beyond the sheet; without any group a strong acid or base is. */
+  readonly plain: (groups: number) => RungKind;
   readonly sheetFor: (kind: RungKind) => RungSheet;
 }
 
@@ -54,14 +56,21 @@ export function ladderSheets(sheet: Sheet): LadderSheets {
   const given = analyte === undefined ? 0 : declared.pKa.filter(({ state }) => state !== 'fitted').length;
   const carbonateVessel = sheet.titrant.kind.value === 'base' ? 'titrant' : 'sample';
   const inWater = sheet.medium.solvent === 'water';
+  const carbonateQuestion = inWater ? question(sheet[carbonateVessel].carbonate) : 'as-declared';
+  const excessQuestion = question(sheet.sample.strongIon);
   return {
     prefix: counted === 0 ? '' : `analyte${counted + 1}.`,
-    carbonate: inWater ? question(sheet[carbonateVessel].carbonate) : 'as-declared',
-    excess: question(sheet.sample.strongIon),
+    carbonate: carbonateQuestion,
+    excess: excessQuestion,
     carbonateVessel,
     // Without the counted substance the others would change their names; no run asks whether it is there at all.
     fewest: Math.max(given, analytes.length > 1 ? 1 : 0),
     largest: largestGroupCount,
+    plain: (groups) => ({
+      groups,
+      carbonate: carbonateQuestion === 'always',
+      excess: excessQuestion === 'always' || groups === 0,
+    }),
     sheetFor: (kind) => {
       const varied = kind.groups === 0 ? null : withGroups(declared, kind.groups, acid);
       const changed = varied === null ? [] : [varied.analyte];

@@ -1,15 +1,7 @@
-import { daviesFunction } from '../chemistry/davies.ts';
 import { startingValues } from '../fit/startingValues.ts';
 import type { Nesting } from './ladderNesting.ts';
+import { type ReadingsReach, shiftOf } from './ladderReach.ts';
 import type { LadderRung } from './ladderRung.ts';
-import type { LadderSheets } from './ladderSheets.ts';
-
-/** Lowest and highest p[H⁺] of the readings, and the usual ionic strength. */
-export interface ReadingsReach {
-  readonly lowest: number;
-  readonly highest: number;
-  readonly ionicStrength: number;
-}
 
 /** Distances from the readings at which an added group is tried, in pH. */
 const outside = [0.5, 1.5];
@@ -17,26 +9,12 @@ const outside = [0.5, 1.5];
 const outOfReach = 12;
 
 /** pKa of the group in that place of a rung that is half lost at a p[H⁺]. */
-export function constantAt(rung: LadderRung, place: number, pH: number, ionicStrength: number): number {
+function constantAt(rung: LadderRung, place: number, pH: number, ionicStrength: number): number {
   return pH + shiftOf(rung, place, ionicStrength);
 }
 
-/** pKa minus the p[H⁺] at which the group is half lost. */
-export function shiftOf({ run, constants }: LadderRung, place: number, ionicStrength: number): number {
-  const { design } = run.run;
-  if (design.coefficientA === 0) return 0;
-  const system = design.systems.find(({ prefix, role }) => role === 'analyte' && constants[0] === `${prefix}pKa1`);
-  if (system === undefined) throw new Error(`no substance has the constant ${constants[0]}`);
-  const acidCharge = system.shape.chargeFullyProtonated - place;
-  return (2 - 2 * acidCharge) * design.coefficientA * daviesFunction(ionicStrength);
-}
-
 /** Parameters of a rung with values from another one, groups by their names; what the other does not have is changed. */
-export function carriedOver(
-  from: LadderRung,
-  to: LadderRung,
-  changes: Readonly<Record<string, number>> = {},
-): Float64Array {
+function carriedOver(from: LadderRung, to: LadderRung, changes: Readonly<Record<string, number>> = {}): Float64Array {
   const { end } = from;
   if (end === null) throw new Error('a rung without an end has nothing to carry over');
   const knowledge = new Map(
@@ -115,9 +93,4 @@ export function startsFromReadings(rung: LadderRung): Float64Array[] {
 
 function middle(rung: LadderRung, reach: ReadingsReach): number {
   return constantAt(rung, 0, 0.5 * (reach.lowest + reach.highest), reach.ionicStrength);
-}
-
-/** Ids of a ladder's own quantities, for whoever asks what was fitted. */
-export function carbonateId({ carbonateVessel }: LadderSheets): string {
-  return `${carbonateVessel}.carbonate`;
 }

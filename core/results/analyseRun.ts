@@ -1,17 +1,21 @@
+import { largestGroupCount } from '../chemistry/protonSystem.ts';
 import { type ShapeOfRun, shapeOfRun } from '../endpoints/shapeOfRun.ts';
-import { type FitFromScratch, fitFromScratch } from '../fit/fitFromScratch.ts';
-import { chooseGroups, type Ladder } from '../inference/chooseGroups.ts';
-import { buildProblem } from '../model/problem.ts';
+import { type FitFromScratch, fitFromScratch, objectiveOf } from '../fit/fitFromScratch.ts';
+import { fitProblem } from '../fit/fitProblem.ts';
+import { endings } from '../fit/leastSquaresEnding.ts';
+import { type Ladder, ladderOfRun } from '../inference/ladderOfRun.ts';
+import { ladderSheets } from '../inference/ladderSheets.ts';
+import { buildProblem, type Problem } from '../model/problem.ts';
 import type { Outcome } from '../notice/outcome.ts';
 import type { Run } from '../run/run.ts';
 import { completeSheet } from '../sheet/completeSheet.ts';
-import type { RunFacts } from '../sheet/runFacts.ts';
 import type { Sheet } from '../sheet/sheet.ts';
 import type { SheetFile } from '../sheet/sheetFile.ts';
 import { describeFittedRun } from './describeFittedRun.ts';
+import { describeLadder } from './describeLadder.ts';
 import { describeUnfittedRun } from './describeUnfittedRun.ts';
 import { directionOfTitrant } from './directionOfTitrant.ts';
-import { endingOfFit, obstacleToFit, sparePoints, tooFewPoints } from './endingOfRun.ts';
+import { endingOfFit, obstacleToFit } from './endingOfRun.ts';
 import type { Progress } from './progress.ts';
 import type { RunResult } from './runResult.ts';
 import { type UsedPoints, usedPoints } from './usedPoints.ts';
@@ -28,47 +32,71 @@ export function* analyseRun(run: Run, sheetFile: SheetFile): Generator<Progress,
   yield { doing: 'looking at the curve', share: 0 };
   const used = usedPoints(run);
   const shape = shapeOfRun(used.volumes, used.readings);
-  const facts = (groupsIfOpen: number): RunFacts => ({
+  const complete = completeSheet(sheetFile, {
     readingKind: run.readingKind,
     titrantKind: directionOfTitrant(shape, sheetFile.reading?.kind ?? run.readingKind),
-    groupsIfOpen,
+    groupsIfOpen: fewestGroups(sheetFile),
   });
-  const complete = completeSheet(sheetFile, facts(1));
   if (!complete.ok) return complete;
   const sheet = complete.value;
 
   const obstacle = obstacleToFit(run, used, shape, sheet);
   if (obstacle !== null) return { ok: true, value: describeUnfittedRun(run, sheet, used, shape, obstacle) };
 
+  const climb = function* (from: number): Generator<Progress, Ladder | null> {
+    const work = ladderOfRun(sheet, used.volumes, used.readings);
+    for (;;) {
+      const step = work.next();
+      if (step.done === true) return step.value;
+      yield { doing: `comparing with ${step.value} groups`, share: from + (0.5 * step.value) / largestGroupCount };
+    }
+  };
+
   if (sheet.sample.analytes.some((analyte) => analyte.groups.assumed)) {
-    const sheetWith = (groups: number): Sheet => {
-      const again = completeSheet(sheetFile, facts(groups));
-      if (!again.ok) throw new Error('a sheet does not become contradictory by its number of groups');
-      return again.value;
-    };
-    const climb = chooseGroups(sheetWith, used.volumes, used.readings);
-    let ladder: Ladder | null = null;
-    while (ladder === null) {
-      const step = climb.next();
-      if (step.done === true) ladder = step.value;
-      else yield { doing: `fitting ${step.value} groups`, share: (1 + step.value) / 8 };
-    }
-    const { chosen } = ladder;
-    if (chosen.fitted === null) {
-      const needed = chosen.parameters + sparePoints;
-      return {
-        ok: true,
-        value: describeUnfittedRun(run, sheet, used, shape, tooFewPoints(used.volumes.length, needed)),
-      };
-    }
-    return { ok: true, value: conclude(run, chosen.sheet, used, shape, chosen.fitted, ladder) };
+    const ladder = yield* climb(0.1);
+    const groups = ladder?.rungs[ladder.chosen].rung.kind.groups ?? 1;
+    const sheets = ladderSheets(sheet);
+    const chosen = ladder === null ? sheet : sheets.sheetFor(sheets.plain(groups)).sheet;
+    yield { doing: 'fitting', share: 0.7 };
+    const problem = buildProblem([{ sheet: chosen, volumes: used.volumes, readings: used.readings }]);
+    if (!problem.ok) return problem;
+    const fitted = fitFromLadder(problem.value, ladder, groups);
+    return { ok: true, value: conclude(run, chosen, used, shape, fitted, ladder) };
   }
 
-  yield { doing: 'fitting', share: 0.2 };
+  yield { doing: 'fitting', share: 0.1 };
   const problem = buildProblem([{ sheet, volumes: used.volumes, readings: used.readings }]);
   if (!problem.ok) return problem;
-  return { ok: true, value: conclude(run, sheet, used, shape, fitFromScratch(problem.value), null) };
+  const fitted = fitFromScratch(problem.value);
+  const isFitted = problem.value.parameters.some(({ kind }) => kind === 'fitted');
+  const ladder = isFitted ? yield* climb(0.4) : null;
+  return { ok: true, value: conclude(run, sheet, used, shape, fitted, ladder) };
 }
+
+/** Groups of a substance whose number is left open, as long as nothing else is known: what it has lost, it must have had. */
+function fewestGroups({ sample }: SheetFile): number {
+  const open = (sample?.analytes ?? []).filter(({ groups, pKa }) => groups === undefined && pKa === undefined);
+  return Math.max(1, ...open.map(({ protonsLostAsWeighed }) => protonsLostAsWeighed ?? 0));
+}
+
+/** The fit of a run whose groups were counted first: by itself, or from the end of its rung where that is better. */
+function fitFromLadder(problem: Problem, ladder: Ladder | null, groups: number): FitFromScratch {
+  const alone = fitFromScratch(problem);
+  const plain = ladder?.sheets.plain(groups);
+  const end = ladder?.rungs.find(
+    ({ rung: { kind } }) =>
+      kind.groups === groups && kind.carbonate === plain?.carbonate && kind.excess === plain.excess,
+  )?.rung.end;
+  if (end === undefined || end === null) return alone;
+  const fit = fitProblem(problem, end.parameters);
+  const better =
+    endings[fit.ending].usable &&
+    (!endings[alone.fit.ending].usable || objectiveOf(fit) < objectiveOf(alone.fit) - sameObjective);
+  return better ? { fit, minima: alone.minima + 1, runnerUp: alone.fit } : alone;
+}
+
+/** Two objectives closer than this are the same minimum. */
+const sameObjective = 1e-3;
 
 /** Fitted or not, what is to be said of the run. */
 function conclude(
@@ -82,5 +110,8 @@ function conclude(
   const ending = endingOfFit(fitted, run, shape, sheet);
   return ending.code === 'fitted' || ending.code === 'predicted'
     ? describeFittedRun(run, sheet, used, shape, fitted, ladder, ending)
-    : describeUnfittedRun(run, sheet, used, shape, ending);
+    : {
+        ...describeUnfittedRun(run, sheet, used, shape, ending),
+        ladder: ladder === null ? null : describeLadder(ladder, sheet),
+      };
 }

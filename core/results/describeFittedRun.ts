@@ -1,6 +1,6 @@
 import type { ShapeOfRun } from '../endpoints/shapeOfRun.ts';
 import type { FitFromScratch } from '../fit/fitFromScratch.ts';
-import type { Ladder } from '../inference/chooseGroups.ts';
+import type { Ladder } from '../inference/ladderOfRun.ts';
 import { settledFit } from '../inference/settledFit.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
@@ -79,7 +79,7 @@ export function describeFittedRun(
       degreesOfFreedom: noise.degreesOfFreedom,
     },
     doubts: [...run.doubts, ...allChecks.flatMap((check) => check(analysis))],
-    ladder: ladder === null ? null : describeLadder(ladder),
+    ladder: ladder === null ? null : describeLadder(ladder, sheet),
     correlation: describeCorrelation(fit, weighted),
     curve,
     points,

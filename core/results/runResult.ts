@@ -18,7 +18,7 @@ export interface RunResult {
   /** Null where nothing was fitted. */
   readonly noise: NoiseResult | null;
   readonly doubts: readonly Doubt[];
-  /** How many groups the run shows; null where the sheet says how many there are. */
+  /** How many groups the run shows; null where that could not be asked. */
   readonly ladder: LadderResult | null;
   /** Correlation of the fitted and known quantities; empty where nothing was fitted. */
   readonly correlation: CorrelationResult;
@@ -139,19 +139,43 @@ export interface NoiseResult {
   readonly degreesOfFreedom: number;
 }
 
+/** The run with other numbers of groups, and with what else may explain it, all on one noise. */
 export interface LadderResult {
-  readonly rungs: readonly {
-    readonly groups: number;
-    /** Sum of squared whitened residuals on the noise common to all rungs; null where the rung could not be fitted. */
-    readonly cost: number | null;
-    readonly parameters: number;
-    readonly aicc: number | null;
-    /** Residual standard deviation, in the unit of the reading. */
-    readonly residual: number | null;
-  }[];
+  /** In order of groups; of equal ones, what keeps to the sheet comes first. */
+  readonly rungs: readonly LadderRungResult[];
+  /** Position of the rung that the run shows. */
   readonly chosen: number;
-  /** The answer in a sentence. */
+  /** Groups of that rung. */
+  readonly groups: number;
+  /** Groups that the sheet declares; null where it leaves them open. */
+  readonly declared: number | null;
+  /** The answer in a few sentences. */
   readonly sentence: string;
+}
+
+export interface LadderRungResult {
+  readonly groups: number;
+  /** Whether carbonate was fitted, of a base titrant or else of the sample. */
+  readonly carbonate: boolean;
+  /** Whether strong acid or base in the sample was fitted; without any group it always is. */
+  readonly excess: boolean;
+  /** Sum of squared whitened residuals on the noise common to all rungs; null where the rung could not be fitted. */
+  readonly cost: number | null;
+  /** Number of fitted quantities. */
+  readonly parameters: number;
+  readonly aicc: number | null;
+  /** Share of the evidence, 0–1; the weights of all rungs add up to one. */
+  readonly weight: number;
+  /** Root mean square of the residuals, in the unit of the reading. */
+  readonly residual: number | null;
+  /** The same in units of the common noise. */
+  readonly weightedResidual: number | null;
+  /** Constants of the counted groups; null where the rung could not be fitted. */
+  readonly pKa: readonly (number | null)[];
+  /** What speaks against it, in words; empty where nothing does. */
+  readonly againstIt: readonly string[];
+  /** F test against a rung contained in it, by its position; null where none is, or nothing can be said. */
+  readonly test: { readonly against: number; readonly F: number; readonly p: number } | null;
 }
 
 export interface CorrelationResult {
