@@ -120,7 +120,8 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
         reducedChiSquare: freedom[r] > 0 ? sumOfSquares(weighted, r, result.residuals) / freedom[r] : null,
       })),
     });
-    if (!usable || round === mostRounds) return finish();
+    if (!usable) return finish();
+    if (round === mostRounds) return { ...finish(), ending: 'iteration-limit' };
 
     if (estimates === null) {
       const plain = new Float64Array(weighted.residualCount);

@@ -12,6 +12,13 @@ import { Whitening } from './whitening.ts';
  */
 const byVolumeFrom = 1.2;
 
+/**
+ * Change of the whitened residuals, in standard uncertainties per unit of pKa,
+ * below which a constant has no influence: moved over the whole scale it would
+ * change them by a millionth.
+ */
+const unseenInfluence = 1e-7;
+
 /** One run inside a weighted problem; arrays have one entry per point unless said otherwise. */
 export interface WeightedRun {
   readonly run: ProblemRun;
@@ -45,6 +52,8 @@ export class WeightedProblem implements LeastSquaresProblem {
   derivativeEvaluations = 0;
 
   private readonly knowledge: readonly number[];
+  /** Parameters that are fitted constants of groups. */
+  private readonly constants: readonly number[];
   /** Parameters of the last derivatives; curve and derivatives there are kept, since new weights only rescale them. */
   private readonly keptParameters: Float64Array;
   private readonly keptCurves: readonly Float64Array[];
@@ -60,6 +69,15 @@ export class WeightedProblem implements LeastSquaresProblem {
     this.problem = problem;
     this.parameterCount = problem.parameters.length;
     this.knowledge = problem.parameters.flatMap((parameter, index) => (parameter.kind === 'knowledge' ? [index] : []));
+    this.constants = [
+      ...new Set(
+        problem.runs.flatMap(({ design, bindings }) =>
+          bindings.flatMap((binding, q) =>
+            binding.kind === 'parameter' && design.quantities[q].role.kind === 'acidity' ? [binding.parameter] : [],
+          ),
+        ),
+      ),
+    ];
     let firstResidual = 0;
     this.runs = problem.runs.map((run) => {
       const count = run.volumes.length;
@@ -133,7 +151,21 @@ export class WeightedProblem implements LeastSquaresProblem {
     this.writePlainJacobian(jacobian);
     for (const { whitening, firstResidual } of this.runs)
       for (let j = 0; j < this.parameterCount; j++) whitening.apply(jacobian, j * this.residualCount + firstResidual);
+    this.dropUnseen(jacobian);
     return true;
+  }
+
+  /**
+   * Sets the derivatives by a constant that the run does not see to zero: far
+   * outside the readings they are rounding, and no step along them is a step.
+   */
+  private dropUnseen(jacobian: Float64Array): void {
+    for (const j of this.constants) {
+      const column = jacobian.subarray(j * this.residualCount, (j + 1) * this.residualCount);
+      let sum = 0;
+      for (const value of column) sum += value * value;
+      if (sum < unseenInfluence ** 2) column.fill(0);
+    }
   }
 
   /** Predicted readings; of a point met at its reading, by the difference of its volumes times its slope. */

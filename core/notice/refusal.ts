@@ -15,6 +15,7 @@ export type RefusalCode =
   | 'row-wrong-width'
   | 'row-outside-run'
   | 'cell-not-a-number'
+  | 'cell-missing'
   // sheets
   | 'sheet-not-json'
   | 'sheet-version'

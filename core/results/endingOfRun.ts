@@ -4,12 +4,15 @@ import { type EndingCode, endings } from '../fit/leastSquaresEnding.ts';
 import { buildProblem } from '../model/problem.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
+import { nernstSlope_mV } from '../units/nernstSlope.ts';
 import { directionOfTitrant } from './directionOfTitrant.ts';
 import type { RunEnding, RunEndingCode } from './runResult.ts';
 import type { UsedPoints } from './usedPoints.ts';
 
 /** Fewer points show no step, whatever is fitted. */
 const fewestPoints = 5;
+/** Readings that change by less than this in the whole run, in pH, show neither a step nor a buffer region. */
+const flatRange = 0.1;
 /** Points beyond the fitted quantities, so that there is something left to judge the noise by. */
 export const sparePoints = 2;
 
@@ -33,7 +36,15 @@ export function obstacleToFit(run: Run, used: UsedPoints, shape: ShapeOfRun, she
   const fitted = problem.value.parameters.filter(({ kind }) => kind === 'fitted').length;
   const distinct = new Set(used.volumes).size;
   const needed = Math.max(fewestPoints, fitted + sparePoints);
-  return fitted > 0 && distinct < needed ? tooFewPoints(distinct, needed) : null;
+  if (fitted > 0 && distinct < needed) return tooFewPoints(distinct, needed);
+  const [lowest, highest] = shape.readingRange ?? [0, 0];
+  const unitsPerPH = sheet.reading.kind === 'mV' ? nernstSlope_mV(sheet.medium.temperature.value) : 1;
+  if (fitted > 0 && highest - lowest < flatRange * unitsPerPH)
+    return {
+      code: 'flat-readings',
+      message: `The readings stay between ${lowest} and ${highest} while the volume runs on, so that nothing follows from them. Look whether the sensor was connected and in the solution, and whether the right column was taken for the reading.`,
+    };
+  return null;
 }
 
 export function tooFewPoints(count: number, needed: number): RunEnding {

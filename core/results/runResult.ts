@@ -28,6 +28,8 @@ export interface RunResult {
   readonly points: readonly PointResult[];
   /** Null where there is no curve or no proton system. */
   readonly speciation: SpeciationResult | null;
+  /** The fit with wild points set aside; null where there is none. Nothing above rests on it. */
+  readonly robust: RobustResult | null;
 }
 
 /** How the work on a run ended. Codes that begin with "fitted" are successes. */
@@ -38,6 +40,7 @@ export type RunEndingCode =
   | 'too-few-points'
   | 'volumes-run-backwards'
   | 'all-rows-excluded'
+  | 'flat-readings'
   | 'no-solution'
   | 'not-converged'
   | 'stopped';
@@ -176,6 +179,26 @@ export interface LadderRungResult {
   readonly againstIt: readonly string[];
   /** F test against a rung contained in it, by its position; null where none is, or nothing can be said. */
   readonly test: { readonly against: number; readonly F: number; readonly p: number } | null;
+}
+
+/** What a fit says in which points far from the curve count less or nothing. */
+export interface RobustResult {
+  /** Points that it does not believe. They are used all the same, unless somebody excludes them. */
+  readonly distrusted: readonly {
+    /** Line of the source file. */
+    readonly line: number;
+    readonly volume_mL: number;
+    /** 0 for a point that counts nothing there, up to 1. */
+    readonly weight: number;
+  }[];
+  /** How far each fitted quantity would move. */
+  readonly moves: readonly {
+    readonly id: string;
+    /** In the unit of the quantity. */
+    readonly shift: number;
+    /** In its standard uncertainties. */
+    readonly inU: number;
+  }[];
 }
 
 export interface CorrelationResult {

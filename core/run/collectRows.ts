@@ -134,5 +134,5 @@ function cellRefusal(
     ? 'Nothing, if the point was not measured; else write the number into the cell.'
     : `Write the number into the cell, with a decimal ${marks.decimal === '.' ? 'point' : 'comma'} as in the rest of the file.`;
   const place = { file, line, column: Math.min(column, section.width - 1) + 1 };
-  return { code: 'cell-not-a-number', message, remedy, place };
+  return { code: missing ? 'cell-missing' : 'cell-not-a-number', message, remedy, place };
 }

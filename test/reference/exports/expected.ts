@@ -73,11 +73,11 @@ export const expected: Readonly<Record<string, ExpectedExport>> = {
       {
         ...pH(2, without(acid, 1, 3, 4, 5, 7)),
         notAccepted: [
-          [3, 2, 'cell-not-a-number'],
-          [5, 2, 'cell-not-a-number'],
-          [6, 2, 'cell-not-a-number'],
-          [7, 2, 'cell-not-a-number'],
-          [9, 1, 'cell-not-a-number'],
+          [3, 2, 'cell-missing'],
+          [5, 2, 'cell-missing'],
+          [6, 2, 'cell-missing'],
+          [7, 2, 'cell-missing'],
+          [9, 1, 'cell-missing'],
         ],
         doubts: ['rows-not-accepted'],
       },
