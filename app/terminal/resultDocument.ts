@@ -22,7 +22,7 @@ export function resultDocument(results: readonly RunResult[], refusals: readonly
 }
 
 function describeRun(result: RunResult) {
-  const { run, ending, quantities, equivalence, noise, doubts, points, ladder, correlation } = result;
+  const { run, ending, quantities, equivalence, noise, doubts, points, ladder, correlation, robust } = result;
   return {
     file: run.file,
     name: run.name,
@@ -56,6 +56,7 @@ function describeRun(result: RunResult) {
     doubts: doubts.map(describeDoubt),
     ladder,
     correlation,
+    robust,
   };
 }
 

@@ -23,7 +23,20 @@ export type DoubtCode =
   | 'temperature-out-of-range'
   | 'starts-disagree'
   | 'concentration-of-nothing'
-  | 'pKa-overlap';
+  | 'pKa-overlap'
+  | 'poorly-determined'
+  | 'few-points-at-pKa'
+  | 'no-visible-step'
+  | 'intervals-disagree'
+  | 'residuals-not-normal'
+  | 'points-distrusted'
+  | 'declared-noise-too-small'
+  | 'carbonate-likely'
+  | 'electrode-likely-off'
+  | 'alkaline-end-low'
+  | 'sensor-stuck'
+  | 'solid-likely'
+  | 'reading-kind-contradicted';
 
 /** Anything that should lower trust in a result. */
 export interface Doubt {

@@ -1,10 +1,13 @@
 import type { ProblemFit } from '../fit/fitProblem.ts';
 import type { WeightedRun } from '../fit/weightedProblem.ts';
+import type { Intervals } from '../inference/intervals.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
 import type { Speciation } from '../speciation/speciation.ts';
-import type { EquivalenceResult, PointResult, QuantityResult } from './runResult.ts';
+import type { MisfitCause } from './misfitCauses.ts';
+import type { EquivalenceResult, PointResult, QuantityResult, RobustResult } from './runResult.ts';
 import type { StepsOfReadings } from './stepsOfReadings.ts';
+import type { UsedPoints } from './usedPoints.ts';
 
 /** A fitted run with everything the results and the checks are drawn from. */
 export interface Analysis {
@@ -15,8 +18,13 @@ export interface Analysis {
   readonly index: number;
   /** The run inside the fit: its model, curve and weights. */
   readonly weighted: WeightedRun;
-  /** Different minima in which the automatic starts ended. */
-  readonly minima: number;
+  /** The second best minimum in which automatic starts ended; null where there is none. */
+  readonly runnerUp: ProblemFit | null;
+  readonly intervals: Intervals;
+  readonly used: UsedPoints;
+  readonly robust: RobustResult | null;
+  /** What would explain a misfit; empty where nothing is amiss or nothing explains it. */
+  readonly causes: readonly MisfitCause[];
   readonly speciation: Speciation;
   /** Steps of the readings, and of the fitted curve taken at the same volumes. */
   readonly readSteps: StepsOfReadings;

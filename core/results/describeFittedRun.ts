@@ -12,9 +12,11 @@ import { equivalenceByFit, equivalenceByReadings } from './describeEquivalence.t
 import { describeLadder } from './describeLadder.ts';
 import { describePoints } from './describePoints.ts';
 import { describeQuantities } from './describeQuantities.ts';
+import { describeRobust } from './describeRobust.ts';
 import { describeSpeciation } from './describeSpeciation.ts';
 import { directionOfTitrant } from './directionOfTitrant.ts';
 import { drawCurve } from './drawCurve.ts';
+import { misfitCauses } from './misfitCauses.ts';
 import { readingAsPH } from './readingAsPH.ts';
 import type { CurveResult, RunEnding, RunResult } from './runResult.ts';
 import { stepsOfReadings } from './stepsOfReadings.ts';
@@ -32,7 +34,6 @@ export function describeFittedRun(
 ): RunResult {
   const index = 0;
   const { fit, intervals } = settledFit(fitted.fit, index);
-  const { minima } = fitted;
   const weighted = fit.weighted.runs[index];
   const { design } = weighted.run;
   const noise = fit.noise[index];
@@ -48,13 +49,20 @@ export function describeFittedRun(
   const freedomOfNoise = noise.declared ? Number.POSITIVE_INFINITY : noise.degreesOfFreedom;
   const quantities = describeQuantities(fit, weighted, sheet, intervals, freedomOfNoise, speciation);
   const points = describePoints(run, used, asPH, weighted);
+  const robust = describeRobust(fit, weighted, run, used, quantities);
+  const wild = new Set(robust?.distrusted.map(({ line }) => line));
+  const leftOut = used.rows.flatMap((row, i) => (wild.has(run.rows[row].line) ? [i] : []));
   const analysis: Analysis = {
     run,
     sheet,
     fit,
     index,
     weighted,
-    minima,
+    runnerUp: fitted.runnerUp,
+    intervals,
+    used,
+    robust,
+    causes: misfitCauses(fit, index, sheet, leftOut),
     speciation,
     readSteps,
     curveSteps,
@@ -84,6 +92,7 @@ export function describeFittedRun(
     curve,
     points,
     speciation: describeSpeciation(design, speciation, [Math.min(...pH), Math.max(...pH)]),
+    robust,
   };
 }
 

@@ -2,6 +2,7 @@ import type { ShapeOfRun } from '../endpoints/shapeOfRun.ts';
 import { designRun } from '../model/runDesign.ts';
 import type { Run } from '../run/run.ts';
 import type { Sheet } from '../sheet/sheet.ts';
+import { readingKindContradicted } from './checks/readingKindContradicted.ts';
 import { equivalenceByReadings } from './describeEquivalence.ts';
 import { describePoints } from './describePoints.ts';
 import { describeUnfitted } from './describeQuantities.ts';
@@ -30,11 +31,12 @@ export function describeUnfittedRun(
     quantities: describeUnfitted(design),
     equivalence: equivalenceByReadings(steps, [], used.volumes),
     noise: null,
-    doubts: run.doubts,
+    doubts: [...run.doubts, ...readingKindContradicted({ run, sheet })],
     ladder: null,
     correlation: { ids: [], matrix: [] },
     curve: null,
     points: describePoints(run, used, asPH, null),
     speciation: null,
+    robust: null,
   };
 }

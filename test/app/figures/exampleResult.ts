@@ -97,6 +97,7 @@ export function exampleResult(wanted: Wanted = {}): RunResult {
     doubts: [],
     ladder: null,
     correlation: { ids: [], matrix: [] },
+    robust: null,
     curve: fitted
       ? {
           volume_mL: grid.volumes_mL,
