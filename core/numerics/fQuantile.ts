@@ -1,6 +1,9 @@
 import quantile from '@stdlib/stats-base-dists-f-quantile';
 import { nearlyInfinite } from './nearlyInfinite.ts';
 
+/** Ratio of degrees of freedom up to which a quantile below the median keeps ten digits. */
+const largestRatio = 1e6;
+
 /**
  * Quantile of the F distribution.
  *
@@ -16,6 +19,8 @@ export function fQuantile(probability: number, numeratorDegrees: number, denomin
   const below = Math.min(denominatorDegrees, nearlyInfinite);
   // Both limits at once: the distribution is a single point.
   if (above === nearlyInfinite && below === nearlyInfinite) return 1;
-  // The library loses a quantile beyond 1e16 · below / above; the reciprocal ratio has no such limit.
-  return above > below ? 1 / quantile(1 - probability, below, above) : quantile(probability, above, below);
+  // The library knows the ratio above · F / below only up to 1e16. The reciprocal has no such limit, but a small
+  // probability would lose its digits by it: 1 − p is exact above a half alone.
+  const byReciprocal = above > below && (probability > 0.5 || above > largestRatio * below);
+  return byReciprocal ? 1 / quantile(1 - probability, below, above) : quantile(probability, above, below);
 }

@@ -18,6 +18,12 @@ describe('fQuantile', () => {
     expect(fQuantile(0.999, 1e4, 0.7) * fQuantile(0.001, 0.7, 1e4)).toBeCloseTo(1, 9);
   });
 
+  it('keeps the digits of a small probability', () => {
+    expect(fQuantile(1e-12, 2, 6) / (3 * Math.expm1(-Math.log1p(-1e-12) / 3))).toBeCloseTo(1, 9);
+    // F(x; 6, 2) = (1 + 1/(3x))^−3.
+    expect(fQuantile(1e-12, 6, 2) / (1 / (3 * (1e4 - 1)))).toBeCloseTo(1, 9);
+  });
+
   it('is 1 where both sides have infinitely many', () => {
     expect(fQuantile(0.2, Infinity, Infinity)).toBe(1);
   });
