@@ -79,10 +79,15 @@ describe('README on the JSON document', () => {
   const experiment = { pKa: [4.5], end_mL: 4, errors };
   const { volumes_mL, readings } = perform(experiment);
   const open = runOf(volumes_mL, readings);
-  // With a sheet, without one (so that there is a ladder and a doubt), and not fitted.
+  const slipped = {
+    ...open,
+    rows: open.rows.map((row, i) => (i === 20 ? { ...row, reading: row.reading + 0.5 } : row)),
+  };
+  // With a sheet, without one (so that there is a doubt), with a wild point, and not fitted.
   const results = [
     workUpExperiment(experiment),
     workUp(open, { sheet: 1 }),
+    workUp(slipped, { sheet: 1 }),
     workUp({ ...open, rows: open.rows.slice(0, 3) }, { sheet: 1 }),
   ];
   const refusal = { code: 'file-empty', message: 'The file is empty.', remedy: 'Choose another.', place: {} } as const;
@@ -93,6 +98,7 @@ describe('README on the JSON document', () => {
 
   it('explains every key', () => {
     expect(keys).toContain('ladder.rungs[].aicc');
+    expect(keys).toContain('robust.distrusted[].line');
     expect(keys).toContain('quantities[].constant.mixed');
     for (const key of keys) expect(named, key).toContain(key);
   });
