@@ -132,7 +132,7 @@ export class WeightedProblem implements LeastSquaresProblem {
 
   private writeKnowledge(parameters: Float64Array, residuals: Float64Array): void {
     this.knowledge.forEach((parameter, k) => {
-      residuals[this.readingCount + k] = parameters[parameter];
+      residuals[this.readingCount + k] = parameters[parameter] - this.problem.parameters[parameter].declared;
     });
   }
 

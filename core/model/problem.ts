@@ -15,6 +15,8 @@ export interface Parameter {
   readonly kind: 'fitted' | 'knowledge';
   /** Runs (by position) that have a quantity bound to it. */
   readonly runs: readonly number[];
+  /** For knowledge: the δ that was declared; 0, save in simulated problems, where declarations are drawn anew. */
+  readonly declared: number;
 }
 
 /** A run with what is declared about it; volumes in mL, readings in the unit of the sheet. */
@@ -43,13 +45,13 @@ export interface Problem {
  * quantities are each run's own unless their id is named in `shared`.
  */
 export function buildProblem(runs: readonly DeclaredRun[], shared: readonly string[] = []): Outcome<Problem> {
-  const parameters: { id: string; kind: Parameter['kind']; runs: number[] }[] = [];
+  const parameters: (Parameter & { runs: number[] })[] = [];
   const byKey = new Map<string, number>();
   const parameterFor = (key: string, id: string, kind: Parameter['kind'], run: number): number => {
     let index = byKey.get(key);
     if (index === undefined) {
       index = parameters.length;
-      parameters.push({ id, kind, runs: [] });
+      parameters.push({ id, kind, runs: [], declared: 0 });
       byKey.set(key, index);
     }
     const users = parameters[index].runs;

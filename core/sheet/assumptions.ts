@@ -9,8 +9,9 @@ export const assumptions = {
   strongIon_M: 0,
   carbonate_M: 0,
   background_M: 0,
-  /** The commonest nominal strength. */
+  /** The commonest nominal strength, but anything up to twice of it is usual: what the run itself says prevails. */
   titrantConcentration_M: 0.1,
+  titrantConcentrationUncertainty_M: 0.05,
   strengthMeans: 'hydroxide',
   buretteGain: 1,
   /** Independent setting error of a 10–20 mL piston burette (common practice). */

@@ -23,6 +23,13 @@ function orFixed(declared: QuantityFile | undefined, value: number): Declaration
   return declared === undefined ? { state: 'fixed', value, assumed: true } : readDeclaration(declared);
 }
 
+function orKnown(
+  declared: QuantityFile | undefined,
+  assumed: { readonly value: number; readonly u: number; readonly source: string | null },
+): Declaration {
+  return declared === undefined ? { state: 'known', ...assumed, assumed: true } : readDeclaration(declared);
+}
+
 /** A quantity that hardly ever occurs: left out means absent, which is not an assumption about the run. */
 function orAbsent(declared: QuantityFile | undefined): Declaration {
   return declared === undefined ? { state: 'fixed', value: 0, assumed: false } : readDeclaration(declared);
@@ -117,7 +124,13 @@ export function completeSheet(file: SheetFile, facts: RunFacts): Outcome<Sheet> 
         strongIon: orAbsent(titrant.strongIon_M),
         kind,
         name: titrant.name ?? null,
-        concentration: titrantInFull ? null : orFixed(titrant.concentration_M, assumptions.titrantConcentration_M),
+        concentration: titrantInFull
+          ? null
+          : orKnown(titrant.concentration_M, {
+              value: assumptions.titrantConcentration_M,
+              u: assumptions.titrantConcentrationUncertainty_M,
+              source: null,
+            }),
         strengthMeans: choose(titrant.strengthMeans, assumptions.strengthMeans as 'hydroxide'),
         systems: (titrant.systems ?? []).map((system) => completeAnalyte(system, facts, true)),
       },

@@ -194,6 +194,12 @@ describe('README on the sheet', () => {
         ['titrant.background_M', `${assumptions.background_M}`],
       ],
       titrantConcentration_M: [['titrant.concentration_M', `${assumptions.titrantConcentration_M}`]],
+      titrantConcentrationUncertainty_M: [
+        [
+          'titrant.concentration_M',
+          `${assumptions.titrantConcentration_M} ± ${assumptions.titrantConcentrationUncertainty_M}`,
+        ],
+      ],
       strengthMeans: [['titrant.strengthMeans', assumptions.strengthMeans]],
       buretteGain: [['burette.gain', `${assumptions.buretteGain}`]],
       settingUncertainty_mL: [['burette.uSetting_mL', `${assumptions.settingUncertainty_mL};`]],
