@@ -4,7 +4,7 @@ import { resultDocument } from '../../app/terminal/resultDocument.ts';
 import { carbonicConstants } from '../../core/chemistry/carbonicAcid.ts';
 import { daviesUpperIonicStrength } from '../../core/chemistry/davies.ts';
 import { largestGroupCount } from '../../core/chemistry/protonSystem.ts';
-import { waterIonProduct, waterTemperatureRange } from '../../core/chemistry/waterIonProduct.ts';
+import { waterIonProduct, waterIonProductSource, waterTemperatureRange } from '../../core/chemistry/waterIonProduct.ts';
 import { largestParameterCount } from '../../core/model/problem.ts';
 import { designRun } from '../../core/model/runDesign.ts';
 import { assumedCalibration, assumptions } from '../../core/sheet/assumptions.ts';
@@ -241,6 +241,7 @@ describe('README on the sheet', () => {
   it('prints the constants of water as they are computed', () => {
     const t = celsius(assumptions.temperature_C);
     expect(leftOut.get('medium.pKw')).toContain(`${waterIonProduct(t).toFixed(3)} at ${t} °C`);
+    expect(leftOut.get('medium.pKw')).toContain(waterIonProductSource.split(' (')[0]);
     const [first, second] = carbonicConstants(t);
     expect(leftOut.get('medium.carbonicPKa[]')).toContain(`${first.toFixed(3)} and ${second.toFixed(3)} at ${t} °C`);
   });
