@@ -3,6 +3,7 @@ import { dataSlopes } from './dataSlopes.ts';
 import { fitProblem, type ProblemFit } from './fitProblem.ts';
 import { endings } from './leastSquaresEnding.ts';
 import { startingValues } from './startingValues.ts';
+import { thinnedProblem } from './thinnedProblem.ts';
 import { WeightedProblem } from './weightedProblem.ts';
 
 /** Points on which starts are compared; more would only cost time. */
@@ -30,7 +31,7 @@ export interface FitFromScratch {
 /** Fits a problem from several starts of its own and keeps the best end. */
 export function fitFromScratch(problem: Problem): FitFromScratch {
   const starts = problem.runs.length === 1 ? rankStarts(problem) : [toParameters(problem, problem.runs.map(bestOfRun))];
-  const few = problem.runs.length === 1 ? thinned(problem) : problem;
+  const few = problem.runs.length === 1 ? thinnedProblem(problem, comparedPoints) : problem;
   const ends =
     few === problem && starts.length === 1
       ? starts
@@ -64,7 +65,7 @@ function distinct(fits: readonly ProblemFit[]): ProblemFit[] {
 /** All starts of a problem of one run, best first, as parameters. */
 function rankStarts(problem: Problem): Float64Array[] {
   const [run] = problem.runs;
-  const weighted = new WeightedProblem(thinned(problem));
+  const weighted = new WeightedProblem(thinnedProblem(problem, comparedPoints));
   const [{ run: few, whitening }] = weighted.runs;
   const unit = run.design.readingKind === 'mV' ? run.design.nernstSlope_mV : 1;
   const noise = { reading: comparedReadingNoise * unit, setting_mL: comparedSetting_mL, dose_mL: 0 };
@@ -100,14 +101,4 @@ function toParameters(problem: Problem, values: readonly Float64Array[]): Float6
     });
   });
   return sums.map((sum, j) => (counts[j] > 0 ? sum / counts[j] : 0));
-}
-
-/** The same problem on fewer points of its one run, evenly taken, both ends included. */
-function thinned(problem: Problem): Problem {
-  const [run] = problem.runs;
-  const count = run.volumes.length;
-  if (count <= comparedPoints) return problem;
-  const kept = Array.from({ length: comparedPoints }, (_, k) => Math.round((k * (count - 1)) / (comparedPoints - 1)));
-  const take = (values: Float64Array) => Float64Array.from(kept, (i) => values[i]);
-  return { ...problem, runs: [{ ...run, volumes: take(run.volumes), readings: take(run.readings) }] };
 }

@@ -7,10 +7,13 @@ import { solveLeastSquares } from './leastSquares.ts';
 import { type EndingCode, endings } from './leastSquaresEnding.ts';
 import { declaredNoise, type Noise, noiseAt } from './noise.ts';
 import { readingResolution } from './readingResolution.ts';
+import { thinnedProblem } from './thinnedProblem.ts';
 import { WeightedProblem } from './weightedProblem.ts';
 
 /** Reading noise assumed for the first weights, in pH; the readings correct it at once. */
 const firstReadingNoise = 0.02;
+/** Runs with more points than this are fitted on so many of them first, which gives all of them a start and weights. */
+const longRun = 400;
 /** Rounds of weighing and fitting; the weights change the answer little, so that a few suffice. */
 const mostRounds = 30;
 /** The solution stands still when parameters move by less than this part of their uncertainty. */
@@ -81,17 +84,26 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
   });
   let estimates: readonly NoiseEstimate[] | null = null;
   const noises = () => runs.map((_, r) => estimates?.[r].noise ?? noiseAt(declarations[r], readings[r]));
-  runs.forEach(({ run, slopes, whitening }, r) => {
-    slopes.set(dataSlopes(run.volumes, run.readings));
-    whitening.set(noiseAt(declarations[r], readings[r]), slopes);
-  });
-
   let parameters = start;
+  let rough = true;
+  const few = thinnedProblem(problem, longRun);
+  const preliminary = few === problem ? null : fitProblem(few, start);
+  if (preliminary !== null && endings[preliminary.ending].usable) {
+    parameters = preliminary.parameters;
+    readings = preliminary.noise.map(({ reading }) => reading);
+    weighted.residuals(parameters, new Float64Array(weighted.residualCount));
+    weighted.weigh(noises(), 1);
+    rough = false;
+  } else
+    runs.forEach(({ run, slopes, whitening }, r) => {
+      slopes.set(dataSlopes(run.volumes, run.readings));
+      whitening.set(noiseAt(declarations[r], readings[r]), slopes);
+    });
+
   let previousMove = Number.POSITIVE_INFINITY;
   let pace = 1;
   let corrections = 0;
   for (let round = 0; ; round++) {
-    const rough = round === 0;
     const result = solveLeastSquares(weighted, parameters, {
       stepLimits,
       residualResolution,
@@ -151,6 +163,7 @@ export function fitProblem(problem: Problem, start: Float64Array): ProblemFit {
       estimates = next;
     }
     weighted.weigh(noises(), rough ? 1 : pace);
+    rough = false;
   }
 }
 

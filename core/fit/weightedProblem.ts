@@ -19,6 +19,12 @@ const byVolumeFrom = 1.2;
  */
 const unseenInfluence = 1e-7;
 
+/** Readings of a curve and the burette volumes at which they were evaluated, mL. */
+interface Evaluation {
+  readonly readings: Float64Array;
+  readonly volumes: Float64Array;
+}
+
 /** One run inside a weighted problem; arrays have one entry per point unless said otherwise. */
 export interface WeightedRun {
   readonly run: ProblemRun;
@@ -56,7 +62,7 @@ export class WeightedProblem implements LeastSquaresProblem {
   private readonly constants: readonly number[];
   /** Parameters of the last derivatives; curve and derivatives there are kept, since new weights only rescale them. */
   private readonly keptParameters: Float64Array;
-  private readonly keptCurves: readonly Float64Array[];
+  private readonly kept: readonly Evaluation[];
   /** Per run: quantities that move, with the parameters that move them. */
   private readonly moving: readonly {
     readonly wanted: Int32Array;
@@ -96,7 +102,10 @@ export class WeightedProblem implements LeastSquaresProblem {
     this.readingCount = firstResidual;
     this.residualCount = firstResidual + this.knowledge.length;
     this.keptParameters = new Float64Array(this.parameterCount).fill(Number.NaN);
-    this.keptCurves = this.runs.map(({ predicted }) => new Float64Array(predicted.length));
+    this.kept = this.runs.map(({ predicted }) => ({
+      readings: new Float64Array(predicted.length),
+      volumes: new Float64Array(predicted.length),
+    }));
     this.moving = this.runs.map(({ run }) => {
       const terms = run.bindings.map(bindingTerms);
       const wanted = Int32Array.from(terms.flatMap((list, quantity) => (list.length > 0 ? [quantity] : [])));
@@ -113,10 +122,14 @@ export class WeightedProblem implements LeastSquaresProblem {
     const kept = this.isKept(parameters);
     if (!kept) this.curveEvaluations++;
     for (let r = 0; r < this.runs.length; r++) {
-      const { run, values, predicted } = this.runs[r];
+      const { run, model, values, predicted, slopes } = this.runs[r];
+      const { readings, volumes } = this.kept[r];
       for (let q = 0; q < values.length; q++) values[q] = boundValue(run.bindings[q], parameters);
-      if (kept) predicted.set(this.keptCurves[r]);
-      else if (!this.predict(this.runs[r])) return false;
+      if (kept) predicted.set(readings);
+      else if (!model.predict(values, predicted)) return false;
+      // A point met at its reading is predicted by the difference of its volumes times its slope.
+      const evaluatedAt = kept ? volumes : model.evaluatedAt;
+      for (let i = 0; i < predicted.length; i++) predicted[i] += slopes[i] * (run.volumes[i] - evaluatedAt[i]);
     }
     this.writePlainResiduals(parameters, residuals);
     for (const { whitening, firstResidual } of this.runs) whitening.apply(residuals, firstResidual);
@@ -140,11 +153,13 @@ export class WeightedProblem implements LeastSquaresProblem {
   derivatives(parameters: Float64Array, jacobian: Float64Array): boolean {
     if (!this.isKept(parameters)) {
       this.derivativeEvaluations++;
-      this.runs.forEach(({ model, predicted }, r) => {
-        const { wanted, derivatives, slopes } = this.moving[r];
-        model.differentiate(wanted, derivatives, slopes);
-        this.straighten(r, derivatives, slopes);
-        this.keptCurves[r].set(predicted);
+      this.runs.forEach(({ run, model, predicted, slopes }, r) => {
+        const { wanted, derivatives, slopes: slopesThere } = this.moving[r];
+        const { readings, volumes } = this.kept[r];
+        model.differentiate(wanted, derivatives, slopesThere);
+        volumes.set(model.evaluatedAt);
+        for (let i = 0; i < readings.length; i++)
+          readings[i] = predicted[i] - slopes[i] * (run.volumes[i] - volumes[i]);
       });
       this.keptParameters.set(parameters);
     }
@@ -168,34 +183,19 @@ export class WeightedProblem implements LeastSquaresProblem {
     }
   }
 
-  /** Predicted readings; of a point met at its reading, by the difference of its volumes times its slope. */
-  private predict({ run, model, values, predicted, slopes }: WeightedRun): boolean {
-    if (!model.predict(values, predicted)) return false;
-    for (let i = 0; i < predicted.length; i++) predicted[i] += slopes[i] * (run.volumes[i] - model.evaluatedAt[i]);
-    return true;
-  }
-
-  /** Turns derivatives where a point was met at its reading into those of its predicted reading. */
-  private straighten(r: number, derivatives: Float64Array, slopesThere: Float64Array): void {
-    const { run, model, slopes } = this.runs[r];
-    const count = slopes.length;
-    for (let i = 0; i < count; i++) {
-      if (model.evaluatedAt[i] === run.volumes[i]) continue;
-      const factor = slopes[i] / slopesThere[i];
-      for (let at = i; at < derivatives.length; at += count) derivatives[at] *= factor;
-    }
-  }
-
   /** Writes the derivatives of the readings, not whitened, at the parameters differentiated last, with the rows of knowledge. */
   writePlainJacobian(jacobian: Float64Array): void {
     jacobian.fill(0);
-    this.runs.forEach(({ predicted, firstResidual }, r) => {
-      const { terms, derivatives } = this.moving[r];
-      const count = predicted.length;
+    this.runs.forEach(({ run, slopes, firstResidual }, r) => {
+      const { terms, derivatives, slopes: slopesThere } = this.moving[r];
+      const { volumes } = this.kept[r];
+      const count = slopes.length;
+      // The derivative of a reading where a point was met becomes that of its predicted reading.
+      const factors = slopes.map((slope, i) => (volumes[i] === run.volumes[i] ? 1 : slope / slopesThere[i]));
       terms.forEach((list, j) => {
         for (const { parameter, sensitivity } of list) {
           const column = parameter * this.residualCount + firstResidual;
-          for (let i = 0; i < count; i++) jacobian[column + i] += sensitivity * derivatives[j * count + i];
+          for (let i = 0; i < count; i++) jacobian[column + i] += sensitivity * factors[i] * derivatives[j * count + i];
         }
       });
     });
@@ -229,7 +229,6 @@ export class WeightedProblem implements LeastSquaresProblem {
         }
       this.setWeights(r, noises[r], whitening);
     });
-    this.keptParameters.fill(Number.NaN);
   }
 
   /** Takes slopes over from another weighted problem of the same runs, with the noise given. */
@@ -238,13 +237,14 @@ export class WeightedProblem implements LeastSquaresProblem {
       slopes.set(other.runs[r].slopes);
       this.setWeights(r, noises[r], whitening);
     });
-    this.keptParameters.fill(Number.NaN);
   }
 
   private setWeights(run: number, noise: Noise, whitening: Whitening): void {
     const { model, slopes } = this.runs[run];
     whitening.set(noise, slopes);
-    model.meetReadings(whitening.sigma.map((sigma) => (sigma > byVolumeFrom * noise.reading ? 1 : 0)));
+    const changed = model.meetReadings(whitening.sigma.map((sigma) => (sigma > byVolumeFrom * noise.reading ? 1 : 0)));
+    // New weights only rescale what is kept, unless points are evaluated elsewhere from now on.
+    if (changed) this.keptParameters.fill(Number.NaN);
   }
 
   private isKept(parameters: Float64Array): boolean {

@@ -69,11 +69,14 @@ export class RunModel {
   /**
    * From now on, evaluates the points marked 1 not at their own volume but
    * where the curve passes their measured reading, as far as there is such a
-   * volume; `evaluatedAt` says where each point was evaluated.
+   * volume; `evaluatedAt` says where each point was evaluated. Returns whether
+   * that is another choice than before.
    */
-  meetReadings(points: ArrayLike<number>): void {
+  meetReadings(points: ArrayLike<number>): boolean {
     if (this.startReadings === null) throw new Error('without readings there is nothing to meet');
+    const changed = this.met.some((mark, i) => mark !== points[i]);
     this.met.set(points);
+    return changed;
   }
 
   /** Forgets the last solutions, so that the next prediction starts cold. */
