@@ -7,7 +7,7 @@ const equal = 0.05;
 export function identifiabilityInWords(members: readonly OpenMember[]): string {
   const names = members.map(nameOf);
   if (members.length === 0) return 'The run leaves a combination of declared values open';
-  if (members.length === 1) return `This run says nothing of the ${names[0]}`;
+  if (members.length === 1) return `This run says nothing of ${/^pK/.test(names[0]) ? '' : 'the '}${names[0]}`;
   if (members.length === 2) return pairInWords(members[0], members[1]);
   const kinds = new Set(members.map(({ quantity }) => kindOf(quantity.role.kind)));
   if (kinds.has('electrode') && kinds.has('constant') && kinds.has('amount'))

@@ -25,7 +25,7 @@ export function beyondReach({ speciation, weighted, quantities, points }: Analys
       return [
         {
           code: 'beyond-reach',
-          seen: `Of the ${label} only one side shows: ${boundOf(quantity)} at 95 %${crossing === undefined ? '' : `; ${reach}`}.`,
+          seen: `Of ${/^pK/.test(label) ? '' : 'the '}${label} only one side shows: ${boundOf(quantity)} at 95 %${crossing === undefined ? '' : `; ${reach}`}.`,
           means: 'Beyond this bound every value fits the run as well as any other; there is no value to state.',
           remedy:
             crossing === undefined

@@ -12,7 +12,7 @@ const differenceOfAlikeGroups = Math.log10(4);
 const factor = 2;
 
 /** Neighbouring fitted constants that a single group of twice the fitted concentration would explain as well. */
-export function constantsOverlap({ fit, weighted, speciation }: Analysis): Doubt[] {
+export function constantsOverlap({ fit, weighted, speciation, quantities }: Analysis): Doubt[] {
   const { design } = weighted.run;
   const position = (id: string) => design.quantities.findIndex((quantity) => quantity.id === id);
   const isFitted = (id: string) => design.quantities[position(id)]?.declaration.state === 'fitted';
@@ -23,6 +23,8 @@ export function constantsOverlap({ fit, weighted, speciation }: Analysis): Doubt
     for (let group = 0; group + 1 < shape.groups; group++) {
       const [lower, upper] = [`${prefix}pKa${group + 1}`, `${prefix}pKa${group + 2}`];
       if (!isFitted(lower) || !isFitted(upper)) continue;
+      // A constant without a value is doubted for that already, and its distance says nothing.
+      if (quantities[position(lower)].value === null || quantities[position(upper)].value === null) continue;
       const byQuantity = new Float64Array(design.quantities.length);
       byQuantity[position(upper)] = 1;
       byQuantity[position(lower)] = -1;

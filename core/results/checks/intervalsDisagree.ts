@@ -19,7 +19,7 @@ export function intervalsDisagree({ intervals, quantities }: Analysis): Doubt[] 
     return [
       {
         code: 'intervals-disagree',
-        seen: `The 95 % interval of the ${label} reaches ${below.toFixed(2)} times as far down and ${above.toFixed(2)} times as far up as its standard uncertainty says.`,
+        seen: `The 95 % interval of ${/^pK/.test(label) ? '' : 'the '}${label} reaches ${below.toFixed(2)} times as far down and ${above.toFixed(2)} times as far up as its standard uncertainty says.`,
         means:
           'The curve answers to this quantity in a bent way; u is only a rough measure here, and the interval is to be trusted.',
         remedy: 'State the interval, not value and u; do not carry u into further sums.',

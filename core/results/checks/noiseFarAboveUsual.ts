@@ -45,10 +45,14 @@ export function noiseFarAboveUsual(analysis: Analysis): Doubt[] {
   return [
     {
       code: 'noise-far-above-usual',
-      seen: `The residuals are ${Math.sqrt(reduced).toPrecision(2)} times as large as the declared noise (${figure}).`,
+      seen: `The residuals are ${timesOver(Math.sqrt(reduced))} times as large as the declared noise (${figure}).`,
       means: 'Either the noise is larger than declared or the model is wrong; the uncertainties are too small.',
       remedy: 'Look at the residuals: scattered ones speak for the noise, bent ones for the model.',
       place,
     },
   ];
+}
+
+function timesOver(ratio: number): string {
+  return ratio < 10 ? ratio.toFixed(1) : ratio.toFixed(0);
 }

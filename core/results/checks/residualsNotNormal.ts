@@ -11,7 +11,7 @@ import { whitenedResiduals } from './whitenedResiduals.ts';
  * some times that with the few dozen points of a titration, whose scores have
  * heavier tails.
  */
-const largestSum = 24;
+const largestSum = 20;
 
 /** Residuals that are lopsided or have heavy tails. Light tails, as of rounded readings, harm no interval. */
 export function residualsNotNormal(analysis: Analysis): Doubt[] {

@@ -1,16 +1,19 @@
+import { readingNoise } from '../../endpoints/readingNoise.ts';
 import { readingResolution } from '../../fit/readingResolution.ts';
 import type { Doubt } from '../../notice/doubt.ts';
-import { studentQuantile } from '../../numerics/studentQuantile.ts';
 import type { Analysis } from '../analysis.ts';
 import { byVolume } from '../byVolume.ts';
 import { breakInside } from './breakInside.ts';
 
-/** Points on either side of a place at which a break is looked for; a smooth miss is a cubic over so few. */
-const halfWindow = 8;
-/** Ratio of the steepest to the flattest slope in the window: beyond it, the miss of any model is bent by the step itself. */
-const calmest = 2.5;
-/** Chance that one place shows such a break; two shapes are tried at every point of a run. */
-const chance = 1e-7;
+/** Windows in which a break is looked for: points on either side, and the degree of what a smooth miss is over so few. */
+const windows = [
+  { half: 6, degree: 2 },
+  { half: 10, degree: 3 },
+] as const;
+/** Span of the curve in a window, in pH: beyond it, the miss of any model is bent by a step. */
+const widestSpan = 1.2;
+/** Standard deviations of a jump or a bend; two shapes are tried at every point of a run. */
+const leastBreak = 8;
 /** Standard uncertainties of a reading by which a run that turns back must do so. */
 const leastTurn = 6;
 
@@ -37,12 +40,25 @@ export function solidLikely(analysis: Analysis): Doubt[] {
   ];
 }
 
+/** Standard deviation of a reading from point to point, which no smooth miss of the model enters. */
+function scatterOf({ weighted, fit, index }: Analysis, order: readonly number[]): number {
+  const { volumes, readings } = weighted.run;
+  const scatter = readingNoise(
+    Float64Array.from(order, (i) => volumes[i]),
+    Float64Array.from(order, (i) => weighted.predicted[i] - readings[i]),
+  );
+  const { declared, reading } = fit.noise[index];
+  return Math.max(scatter ?? reading, declared ? reading : 0, readingResolution(readings) / Math.sqrt(12));
+}
+
 /** Where readings go against the titrant, three points before compared with three after so that a single wild one does nothing. */
-function turnBack({ used, run, weighted, fit, index }: Analysis): Place | null {
+function turnBack(analysis: Analysis): Place | null {
+  const { used, run, weighted } = analysis;
   const order = byVolume(used.volumes);
   const { readings } = weighted.run;
-  const direction = Math.sign(weighted.slopes.reduce((sum, slope) => sum + slope, 0));
-  const least = Math.max(leastTurn * fit.noise[index].reading, 3 * readingResolution(readings));
+  const ends = [order.slice(0, 3), order.slice(-3)].map((few) => middle(few.map((i) => readings[i])));
+  const direction = Math.sign(ends[1] - ends[0]);
+  const least = Math.max(leastTurn * scatterOf(analysis, order), 3 * readingResolution(readings));
   let worst = least;
   let place: Place | null = null;
   for (let k = 3; k + 3 <= order.length; k++) {
@@ -58,31 +74,35 @@ function turnBack({ used, run, weighted, fit, index }: Analysis): Place | null {
 }
 
 /** Where residuals break off or bend from one point to the next, away from the steps. */
-function kink({ fit, weighted, used, run, robust, index }: Analysis): Place | null {
+function kink(analysis: Analysis): Place | null {
+  const { weighted, used, run, robust } = analysis;
   const wild = new Set(robust?.distrusted.map(({ line }) => line));
   const order = byVolume(used.volumes).filter((i) => !wild.has(run.rows[used.rows[i]].line));
-  const { volumes, readings } = weighted.run;
-  const rounding = readingResolution(readings) / Math.sqrt(12);
-  const degrees = 2 * halfWindow - 5;
-  const least = studentQuantile(1 - 0.5 * chance, degrees);
-  let strongest = least;
+  const { volumes, readings, design } = weighted.run;
+  const span = widestSpan * (design.readingKind === 'mV' ? design.nernstSlope_mV : 1);
+  const misses = weighted.predicted.map((value, i) => value - readings[i]);
+  const least = scatterOf(analysis, order);
+  let strongest = leastBreak;
   let place: Place | null = null;
-  for (let k = halfWindow; k + halfWindow <= order.length; k++) {
-    const window = order.slice(k - halfWindow, k + halfWindow);
-    const slopes = window.map((i) => Math.abs(weighted.slopes[i]));
-    if (!(Math.max(...slopes) <= calmest * Math.min(...slopes))) continue;
-    const sigma = window.map((i) => weighted.whitening.sigma[i]);
-    const leastScatter = fit.noise[index].declared ? 1 : rounding / Math.max(...sigma);
-    const strength = breakInside(
-      window.map((i) => volumes[i]),
-      window.map((i, j) => (weighted.predicted[i] - readings[i]) / sigma[j]),
-      leastScatter,
-    );
-    if (!(strength > strongest)) continue;
-    strongest = strength;
-    place = { ...run.rows[used.rows[order[k]]], what: 'The residuals break off or bend sharply' };
-  }
+  for (const { half, degree } of windows)
+    for (let k = half; k + half <= order.length; k++) {
+      const window = order.slice(k - half, k + half);
+      if (spanOf(window.map((i) => weighted.predicted[i])) > span) continue;
+      const strength = breakInside(
+        window.map((i) => volumes[i]),
+        window.map((i) => misses[i]),
+        degree,
+        least,
+      );
+      if (!(strength > strongest)) continue;
+      strongest = strength;
+      place = { ...run.rows[used.rows[order[k]]], what: 'The residuals break off or bend sharply' };
+    }
   return place;
+}
+
+function spanOf(values: readonly number[]): number {
+  return Math.max(...values) - Math.min(...values);
 }
 
 function middle([a, b, c]: readonly number[]): number {
