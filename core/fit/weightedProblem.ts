@@ -11,6 +11,8 @@ import { Whitening } from './whitening.ts';
  * parameters come in straight where the curve is steep.
  */
 const byVolumeFrom = 1.2;
+/** Once compared by volume, a point is again compared by reading only below this, lest it go to and fro. */
+const byVolumeUntil = 1.1;
 
 /**
  * Change of the whitened residuals, in standard uncertainties per unit of pKa,
@@ -242,7 +244,11 @@ export class WeightedProblem implements LeastSquaresProblem {
   private setWeights(run: number, noise: Noise, whitening: Whitening): void {
     const { model, slopes } = this.runs[run];
     whitening.set(noise, slopes);
-    const changed = model.meetReadings(whitening.sigma.map((sigma) => (sigma > byVolumeFrom * noise.reading ? 1 : 0)));
+    const changed = model.meetReadings(
+      whitening.sigma.map((sigma, i) =>
+        sigma > (model.met[i] === 1 ? byVolumeUntil : byVolumeFrom) * noise.reading ? 1 : 0,
+      ),
+    );
     // New weights only rescale what is kept, unless points are evaluated elsewhere from now on.
     if (changed) this.keptParameters.fill(Number.NaN);
   }

@@ -33,6 +33,9 @@ export class RunModel {
   /** Burette volume at which every point was evaluated last, mL: its own, or for points met at their reading that of the curve. */
   readonly evaluatedAt: Float64Array;
 
+  /** 1 for points that are met at their measured reading; see `meetReadings`. */
+  readonly met: Uint8Array;
+
   private readonly vessels: Vessels;
   private readonly inverse: InverseCurve;
   private readonly scale: ReadingScale;
@@ -40,8 +43,6 @@ export class RunModel {
   private readonly startReadings: Float64Array | null;
   private values: Float64Array;
   private started = false;
-  /** 1 for points that are met at their measured reading. */
-  private readonly met: Uint8Array;
 
   /**
    * @param volumes burette readings, mL

@@ -37,3 +37,6 @@ export const assumptions = {
 
 /** Source shared by all runs whose electrode offset is assumed. */
 export const assumedCalibration = 'calibration';
+
+/** Source shared by all runs whose titrant strength is assumed: one bottle. */
+export const assumedTitrant = 'strength of the titrant';

@@ -6,7 +6,7 @@ import type { Outcome } from '../notice/outcome.ts';
 import type { Refusal } from '../notice/refusal.ts';
 import { nernstSlope_mV } from '../units/nernstSlope.ts';
 import { celsius } from '../units/temperature.ts';
-import { assumedCalibration, assumptions } from './assumptions.ts';
+import { assumedCalibration, assumedTitrant, assumptions } from './assumptions.ts';
 import { completeAnalyte } from './completeAnalyte.ts';
 import type { Declaration } from './declaration.ts';
 import { readDeclaration } from './readDeclaration.ts';
@@ -129,7 +129,7 @@ export function completeSheet(file: SheetFile, facts: RunFacts): Outcome<Sheet> 
           : orKnown(titrant.concentration_M, {
               value: assumptions.titrantConcentration_M,
               u: assumptions.titrantConcentrationUncertainty_M,
-              source: null,
+              source: assumedTitrant,
             }),
         strengthMeans: choose(titrant.strengthMeans, assumptions.strengthMeans as 'hydroxide'),
         systems: (titrant.systems ?? []).map((system) => completeAnalyte(system, facts, true)),

@@ -1,9 +1,13 @@
+import { boundErrors } from './boundErrors.ts';
 import { coverageOf } from './coverageStudy.ts';
 import { studyDesigns } from './studyDesigns.ts';
 
 /** Runs per design; a first argument of the call asks for another number. */
 const usualRuns = 2000;
 const firstSeed = 1;
+/** Bounds are compared with dense profiles where there are this many, and so many of them. */
+const fewestBounds = 10;
+const comparedBounds = 40;
 
 const runs = Number(process.argv[2] ?? usualRuns);
 const only = process.argv[3];
@@ -16,8 +20,14 @@ for (const [number, design] of studyDesigns.entries()) {
   console.log(
     `${number + 1} ${design.name}: ${failed} not fitted, ${((performance.now() - started) / runs).toFixed(0)} ms a run`,
   );
-  for (const { id, stated, twoSided, holds, uOverLimit } of quantities)
+  for (const { id, stated, twoSided, holds, uOverLimit, bounds } of quantities) {
     console.log(
-      `  ${id.padEnd(18)} true ${((100 * holds) / stated).toFixed(1).padStart(5)} %  two-sided ${((100 * twoSided) / runs).toFixed(1).padStart(5)} %  bounds ${String(stated - twoSided).padStart(4)}  open ${String(runs - failed - stated).padStart(4)}  u over limit ${uOverLimit?.toFixed(3) ?? '–'}`,
+      `  ${id.padEnd(18)} true ${((100 * holds) / stated).toFixed(1).padStart(5)} %  two-sided ${((100 * twoSided) / runs).toFixed(1).padStart(5)} %  bounds ${String(bounds.length).padStart(4)}  open ${String(runs - failed - stated).padStart(4)}  u over limit ${uOverLimit?.toFixed(3) ?? '–'}`,
     );
+    if (bounds.length < fewestBounds) continue;
+    const errors = boundErrors(design, id, bounds.slice(0, comparedBounds));
+    console.log(
+      `  ${''.padEnd(18)} bounds against a dense profile: median difference ${errors[errors.length >> 1].toFixed(3)} (at most 0.3), largest ${errors[errors.length - 1].toFixed(3)}, of ${errors.length}`,
+    );
+  }
 }

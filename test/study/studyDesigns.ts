@@ -52,7 +52,7 @@ export const studyDesigns: readonly StudyDesign[] = [
     concentration_M: 0.015,
     noise: 'reading left out',
   },
-  { ...usual, name: 'triprotic, one at the edge of reach', pKa: [1.5, 5.6, 8.9], concentration_M: 0.006 },
+  { ...usual, name: 'triprotic, one at the edge of reach', pKa: [0.5, 5.6, 8.9], concentration_M: 0.006 },
   {
     ...usual,
     name: 'dilute, carbonate fitted',

@@ -17,7 +17,7 @@ function problemOf(runs: readonly DeclaredRun[], shared?: readonly string[]): Pr
   return problem.value;
 }
 
-const acid = { sample: { analytes: [{ groups: 1 }] } };
+const acid = { sample: { analytes: [{ groups: 1 }] }, titrant: { concentration_M: 0.1 } };
 
 describe('buildProblem', () => {
   it('gives every run its own fitted quantities', () => {
