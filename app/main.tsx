@@ -8,6 +8,7 @@ import './styles/notices.css';
 import './styles/sentence.css';
 import './styles/popover.css';
 import './styles/results.css';
+import './styles/drawings.css';
 import './styles/points.css';
 import './styles/print.css';
 import { ErrorBoundary } from './views/page/ErrorBoundary.tsx';

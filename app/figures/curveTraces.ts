@@ -3,6 +3,7 @@ import type { FigureTrace } from './figure.ts';
 import type { FigureFrame } from './figureFrame.ts';
 import type { FigureStyle } from './figureStyle.ts';
 import { dense, markerSize } from './markerSize.ts';
+import { standingOut, standingOutMark } from './standingOut.ts';
 
 /** Reading against volume: the fitted curve, the points used as open circles, the excluded ones as crosses. */
 export function curveTraces(frame: FigureFrame, drawn: readonly PointResult[], style: FigureStyle): FigureTrace[] {
@@ -55,5 +56,18 @@ export function curveTraces(frame: FigureFrame, drawn: readonly PointResult[], s
     });
   }
   if (areDense) traces.push(...line);
+  const apart = standingOut(frame, drawn);
+  if (apart.length > 0) {
+    traces.push({
+      type: 'scatter',
+      name: 'points that stand out',
+      mode: 'markers',
+      x: apart.map((point) => point.volume_mL),
+      y: apart.map((point) => point.reading),
+      xaxis: 'x',
+      yaxis: 'y',
+      marker: standingOutMark(style),
+    });
+  }
   return traces;
 }

@@ -6,7 +6,9 @@ import { symbolOfSystem } from './formLabel.ts';
 /** What the figure shows, in sentences: for the reader, and for who cannot see it. */
 export function figureCaption(run: FigureRun): string {
   if (run.points.length === 0) return 'The run holds no points.';
-  return [readings(run), equivalence(run), residuals(run), speciation(run)].filter((part) => part !== '').join(' ');
+  return [readings(run), equivalence(run), residuals(run), apart(run), speciation(run)]
+    .filter((part) => part !== '')
+    .join(' ');
 }
 
 function readings(run: FigureRun): string {
@@ -65,6 +67,12 @@ function residuals(run: FigureRun): string {
     ? '; the band is twice the standard uncertainty of each point'
     : '';
   return `Residuals lie between ${low} and ${high}${unit}${band}.`;
+}
+
+function apart({ result }: FigureRun): string {
+  const lines = result.robust?.distrusted.map(({ line }) => String(line)) ?? [];
+  if (lines.length === 0) return '';
+  return `Diamonds: too far from the curve for chance, ${lines.length === 1 ? 'line' : 'lines'} ${listed(lines)}.`;
 }
 
 function speciation(run: FigureRun): string {

@@ -4,6 +4,7 @@ import type { FigureFrame } from './figureFrame.ts';
 import type { FigureStyle } from './figureStyle.ts';
 import { markerSize } from './markerSize.ts';
 import { bandWidth } from './residualRange.ts';
+import { standingOut, standingOutMark } from './standingOut.ts';
 
 /** Opacity of the band as two hexadecimal digits: 12 %. */
 const BAND_ALPHA = '1f';
@@ -49,6 +50,13 @@ export function residualTraces(frame: FigureFrame, drawn: readonly PointResult[]
     markers('residuals of excluded points', excluded, cross),
     markers('excluded points above the panel', above, { ...outward, symbol: 'triangle-up-open' }),
     markers('excluded points below the panel', below, { ...outward, symbol: 'triangle-down-open' }),
+    markers(
+      'residuals that stand out',
+      standingOut(frame, drawn).flatMap(({ volume_mL, residual }) =>
+        residual === null || residual > high || residual < low ? [] : [{ volume_mL, at: residual }],
+      ),
+      standingOutMark(style),
+    ),
   ].filter((trace) => (trace.x?.length ?? 0) > 0);
 }
 

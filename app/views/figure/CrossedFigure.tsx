@@ -7,6 +7,7 @@ import { figureFrame } from '../../figures/figureFrame.ts';
 import { type FigureView, figureRun } from '../../figures/figureRun.ts';
 import { defaultFrontSystems } from '../../figures/frontSystems.ts';
 import { labelRow } from '../../figures/panels.ts';
+import type { Pointed } from '../page/pointing.ts';
 import { FigureActions } from './FigureActions.tsx';
 import { FigureLayer } from './FigureLayer.tsx';
 import { Plot } from './Plot.tsx';
@@ -17,8 +18,8 @@ import './crossedFigure.css';
 
 interface Props {
   readonly result: RunResult;
-  /** Source line of the point that is chosen elsewhere on the page. */
-  readonly selectedLine: number | null;
+  /** What is marked from elsewhere on the page. */
+  readonly pointed: Pointed | null;
   /** Excludes or includes the row of this source line. */
   readonly onToggleRow: (line: number) => void;
 }
@@ -31,7 +32,7 @@ interface Choice {
 }
 
 /** Reading against volume, residuals below it, speciation beside it on the same pH axis, and one cursor through all three. */
-export function CrossedFigure({ result, selectedLine, onToggleRow }: Props) {
+export function CrossedFigure({ result, pointed, onToggleRow }: Props) {
   const area = useRef<HTMLDivElement>(null);
   const width = useWidth(area);
   const style = useFigureStyle(area);
@@ -55,13 +56,7 @@ export function CrossedFigure({ result, selectedLine, onToggleRow }: Props) {
       <div ref={area} className="figure-area" style={{ height: frame?.panels.height }}>
         {figure !== null && <Plot figure={figure} />}
         {frame !== null && (
-          <FigureLayer
-            frame={frame}
-            front={front}
-            selectedLine={selectedLine}
-            onView={setView}
-            onToggleRow={onToggleRow}
-          />
+          <FigureLayer frame={frame} front={front} pointed={pointed} onView={setView} onToggleRow={onToggleRow} />
         )}
         {frame?.panels.speciation != null && result.speciation !== null && systems > 1 && (
           <SystemChooser

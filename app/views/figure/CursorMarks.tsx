@@ -2,25 +2,27 @@ import type { Cursor } from '../../figures/cursor.ts';
 import type { FigureFrame } from '../../figures/figureFrame.ts';
 import { contains, toPixels } from '../../figures/pixelAxis.ts';
 import type { Rectangle } from '../../figures/rectangle.ts';
+import type { Pointed } from '../page/pointing.ts';
+import { PointedMarks } from './PointedMarks.tsx';
+import { PointRings } from './PointRings.tsx';
 
 interface Props {
   readonly frame: FigureFrame;
   readonly cursor: Cursor | null;
-  /** Source line of the point that is chosen elsewhere on the page. */
-  readonly selectedLine: number | null;
+  /** What is marked from elsewhere on the page. */
+  readonly pointed: Pointed | null;
   /** The part being marked for enlarging. */
   readonly zoomed: Rectangle | null;
 }
 
-/** The lines of the cursor through all panels, the ring around its point, and the marked point. */
-export function CursorMarks({ frame, cursor, selectedLine, zoomed }: Props) {
-  const selected = selectedLine === null ? -1 : frame.run.points.findIndex((point) => point.line === selectedLine);
+/** The lines of the cursor through all panels, the ring around its point, and what is marked from elsewhere. */
+export function CursorMarks({ frame, cursor, pointed, zoomed }: Props) {
   return (
     <svg className="figure-marks" width={frame.panels.width} height={frame.panels.height} aria-hidden="true">
       {zoomed !== null && (
         <rect className="figure-zoomed" x={zoomed.left} y={zoomed.top} width={zoomed.width} height={zoomed.height} />
       )}
-      {selected >= 0 && <PointRings frame={frame} point={selected} radius={9} name="figure-selected" />}
+      {pointed !== null && <PointedMarks frame={frame} pointed={pointed} />}
       {cursor !== null && <CursorLines frame={frame} cursor={cursor} />}
       {cursor?.point != null && (
         <PointRings frame={frame} point={cursor.point} radius={6.5} name="figure-nearest-ring" />
@@ -53,29 +55,6 @@ function CursorLines({ frame, cursor }: { readonly frame: FigureFrame; readonly 
         />
       )}
       {x !== null && y !== null && <circle cx={x} cy={y} r={3} />}
-    </g>
-  );
-}
-
-interface RingProps {
-  readonly frame: FigureFrame;
-  readonly point: number;
-  readonly radius: number;
-  readonly name: string;
-}
-
-/** Around a point of the curve, and around its residual where that lies in its panel. */
-function PointRings({ frame, point, radius, name }: RingProps) {
-  const { volume_mL, reading, residual } = frame.run.points[point];
-  const { volume, reading: readingAxis, residual: residualAxis } = frame.axes;
-  if (!contains(volume.range, volume_mL)) return null;
-  const x = toPixels(volume, volume_mL);
-  return (
-    <g className={name}>
-      {contains(readingAxis.range, reading) && <circle cx={x} cy={toPixels(readingAxis, reading)} r={radius} />}
-      {residual !== null && residualAxis !== null && contains(residualAxis.range, residual) && (
-        <circle cx={x} cy={toPixels(residualAxis, residual)} r={radius} />
-      )}
     </g>
   );
 }

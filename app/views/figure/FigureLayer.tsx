@@ -2,6 +2,7 @@ import { useId, useState } from 'react';
 import { describePoint } from '../../figures/describePoint.ts';
 import type { FigureFrame } from '../../figures/figureFrame.ts';
 import type { FigureView } from '../../figures/figureRun.ts';
+import type { Pointed } from '../page/pointing.ts';
 import { CursorMarks } from './CursorMarks.tsx';
 import { type CursorTarget, cursorOf } from './cursorTarget.ts';
 import { Readout } from './Readout.tsx';
@@ -12,13 +13,13 @@ import { markedByDrag } from './zoomDrag.ts';
 interface Props {
   readonly frame: FigureFrame;
   readonly front: ReadonlySet<string>;
-  readonly selectedLine: number | null;
+  readonly pointed: Pointed | null;
   readonly onView: (view: FigureView) => void;
   readonly onToggleRow: (line: number) => void;
 }
 
 /** Everything that moves, over the drawn figure: cursor, readout, enlarging, keys. The drawing itself stays as it is. */
-export function FigureLayer({ frame, front, selectedLine, onView, onToggleRow }: Props) {
+export function FigureLayer({ frame, front, pointed, onView, onToggleRow }: Props) {
   const { run, panels } = frame;
   const help = useId();
   const [target, setTarget] = useState<CursorTarget | null>(null);
@@ -50,7 +51,7 @@ export function FigureLayer({ frame, front, selectedLine, onView, onToggleRow }:
         <CursorMarks
           frame={frame}
           cursor={cursor}
-          selectedLine={selectedLine}
+          pointed={pointed}
           zoomed={drag === null ? null : markedByDrag(frame, drag)}
         />
       </div>

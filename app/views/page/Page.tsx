@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef } from 'react';
 import type { Desk } from '../../state/createDesk.ts';
 import { toggleRow } from '../../state/toggleRow.ts';
 import { useShownRun } from '../../state/useShownRun.ts';
@@ -10,20 +10,25 @@ import { Masthead } from '../masthead/Masthead.tsx';
 import { RunChooser } from '../masthead/RunChooser.tsx';
 import { NotAccepted } from '../notices/NotAccepted.tsx';
 import { WorkLine } from '../notices/WorkLine.tsx';
+import { MoreResults } from '../results/MoreResults.tsx';
 import { Results } from '../results/Results.tsx';
 import { RowsTable } from '../rows/RowsTable.tsx';
+import { PointingContext } from './pointing.ts';
+import { usePointed } from './usePointed.ts';
 import { useUndoKeys } from './useUndoKeys.ts';
 
 /** The one page: conditions, figure, results. */
 export function Page({ desk }: { readonly desk: Desk }) {
   const shown = useShownRun();
-  const [selectedLine, setSelectedLine] = useState<number | null>(null);
+  const pointing = usePointed(shown === null ? '' : `${shown.input.file} ${shown.input.index}`);
   const picker = useRef<HTMLInputElement>(null);
   useUndoKeys();
   const title = shown === null ? 'Stepwell' : `${shown.run.name} – Stepwell`;
   useEffect(() => {
     document.title = title;
   }, [title]);
+  const latest = shown?.latest ?? null;
+  const declared = latest === null ? null : declaredFields(latest.input.sheet, latest.result.sheet);
   const openFiles = useCallback((files: readonly File[]) => void desk.open(files), [desk]);
   const choose = useCallback(() => picker.current?.click(), []);
 
@@ -56,28 +61,30 @@ export function Page({ desk }: { readonly desk: Desk }) {
         )}
         <WorkLine onStop={desk.stop} onRetry={desk.retry} />
         {shown !== null && (
-          <div className="findings" aria-busy={!shown.isCurrent}>
-            <div className="figure-side">
-              {shown.latest === null ? (
-                <p className="figure-empty">The curve and its results appear here as soon as the run is fitted.</p>
-              ) : (
-                <CrossedFigure result={shown.latest.result} onToggleRow={toggleRow} selectedLine={selectedLine} />
+          <PointingContext value={pointing}>
+            <div className="findings" aria-busy={!shown.isCurrent}>
+              <div className="figure-side">
+                {latest === null ? (
+                  <p className="figure-empty">The curve and its results appear here as soon as the run is fitted.</p>
+                ) : (
+                  <CrossedFigure result={latest.result} onToggleRow={toggleRow} pointed={pointing.pointed} />
+                )}
+                <RowsTable
+                  run={shown.run}
+                  points={shown.isCurrent ? (latest?.result.points ?? []) : []}
+                  selectedLine={pointing.pointed?.line ?? null}
+                  onSelect={(line) => pointing.point(line === null ? null : { line })}
+                  onToggle={toggleRow}
+                />
+              </div>
+              {latest !== null && declared !== null && (
+                <>
+                  <Results result={latest.result} declared={declared} />
+                  <MoreResults result={latest.result} declared={declared} />
+                </>
               )}
-              <RowsTable
-                run={shown.run}
-                points={shown.isCurrent ? (shown.latest?.result.points ?? []) : []}
-                selectedLine={selectedLine}
-                onSelect={setSelectedLine}
-                onToggle={toggleRow}
-              />
             </div>
-            {shown.latest !== null && (
-              <Results
-                result={shown.latest.result}
-                declared={declaredFields(shown.latest.input.sheet, shown.latest.result.sheet)}
-              />
-            )}
-          </div>
+          </PointingContext>
         )}
       </main>
       <footer className="page-foot">

@@ -1,6 +1,17 @@
 import type { EquivalenceResult } from '../../../core/index.ts';
 import { formatQuantity } from '../../widgets/formatQuantity.ts';
-import { groupEquivalence } from './groupEquivalence.ts';
+import { type EquivalenceStep, groupEquivalence } from './groupEquivalence.ts';
+import { ShareBar } from './ShareBar.tsx';
+import { shareParts } from './shareParts.ts';
+import { stepWords } from './stepWords.ts';
+
+interface Props {
+  readonly results: readonly EquivalenceResult[];
+  /** What sources of variance are called, by id. */
+  readonly labels: ReadonlyMap<string, string>;
+  /** Sources of variance in the order of their looks. */
+  readonly sources: readonly string[];
+}
 
 const ways = [
   { by: 'fit', label: 'from the fit' },
@@ -9,10 +20,9 @@ const ways = [
 ] as const;
 
 /** Equivalence volumes of every step, by every way, side by side. */
-export function EquivalenceTable({ results }: { readonly results: readonly EquivalenceResult[] }) {
+export function EquivalenceTable({ results, labels, sources }: Props) {
   const steps = groupEquivalence(results);
-  const severalAnalytes = new Set(steps.map(({ analyte }) => analyte)).size > 1;
-  const remarks = [...new Set(results.map(({ by, remark }) => `${by}\n${remark}`))].map((text) => text.split('\n'));
+  const words = stepWords(steps);
   return (
     <>
       <table className="equivalence">
@@ -28,14 +38,20 @@ export function EquivalenceTable({ results }: { readonly results: readonly Equiv
           </tr>
         </thead>
         <tbody>
-          {steps.map((step) => (
+          {steps.map((step, k) => (
             <tr key={`${step.analyte} ${step.step}`}>
               <th scope="row">
-                {step.step > 0 ? step.step : ''}
-                {(severalAnalytes || step.step === 0) && <small> {step.analyte}</small>}
+                {words[k].name}
+                {words[k].remark !== '' && <small> {words[k].remark}</small>}
               </th>
               {ways.map(({ by }) => (
-                <Volume key={by} result={step[by]} />
+                <td key={by} className="number">
+                  {step[by].length === 0 ? (
+                    <small>{by === 'fit' ? 'not in the model' : 'not seen'}</small>
+                  ) : (
+                    step[by].map((result) => <Volume key={result.remark} result={result} />)
+                  )}
+                </td>
               ))}
             </tr>
           ))}
@@ -44,31 +60,48 @@ export function EquivalenceTable({ results }: { readonly results: readonly Equiv
       <details className="how">
         <summary>How each is meant</summary>
         <ul>
-          {remarks
-            .filter(([, remark]) => remark !== '')
-            .map(([by, remark]) => (
-              <li key={`${by} ${remark}`}>
-                <strong>{ways.find((way) => way.by === by)?.label}:</strong> {remark}
-              </li>
-            ))}
+          {steps.map((step, k) => (
+            <li key={`${step.analyte} ${step.step}`}>
+              {words[k].name} {words[k].remark}
+              <Meanings step={step} labels={labels} sources={sources} />
+            </li>
+          ))}
         </ul>
       </details>
     </>
   );
 }
 
-function Volume({ result }: { readonly result: EquivalenceResult | null }) {
-  if (result === null || result.volume_mL === null)
-    return (
-      <td className="number" title={result?.remark ?? 'This way sees no such step.'}>
-        –
-      </td>
-    );
+function Meanings({ step, labels, sources }: { readonly step: EquivalenceStep } & Omit<Props, 'results'>) {
+  return (
+    <ul>
+      {ways.flatMap(({ by, label }) =>
+        step[by]
+          .filter(({ remark, shares }) => remark !== '' || shares.length > 0)
+          .map(({ remark, shares }) => (
+            <li key={`${by} ${remark}`}>
+              {label}
+              {remark === '' ? '' : `: ${remark}`}
+              {shares.length > 0 && (
+                <>
+                  {'; '}
+                  <ShareBar parts={shareParts(shares, sources, labels)} />
+                </>
+              )}
+            </li>
+          )),
+      )}
+    </ul>
+  );
+}
+
+function Volume({ result }: { readonly result: EquivalenceResult }) {
+  if (result.volume_mL === null) return <small title={result.remark}>not determined</small>;
   const { value, u } = formatQuantity(result.volume_mL, result.u, 5);
   return (
-    <td className="number" title={result.remark}>
+    <div title={result.remark}>
       {value}
       {u !== null && <small> u {u}</small>}
-    </td>
+    </div>
   );
 }

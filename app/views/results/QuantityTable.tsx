@@ -1,31 +1,34 @@
 import { Fragment, useState } from 'react';
-import type { Doubt, QuantityResult } from '../../../core/index.ts';
-import { DoubtNote } from '../../widgets/DoubtNote.tsx';
+import type { Doubt, QuantityResult, RunResult } from '../../../core/index.ts';
 import type { DeclaredField } from '../conditions/declaredFields.ts';
+import { DoubtAtPlace } from './DoubtAtPlace.tsx';
 import { intervalScale } from './intervalScale.ts';
+import { isExact } from './isExact.ts';
 import { QuantityRow } from './QuantityRow.tsx';
 
 interface Props {
-  readonly quantities: readonly QuantityResult[];
-  /** False where the work ended without a fit. */
-  readonly isFitted: boolean;
+  readonly result: RunResult;
   /** Doubts that concern one quantity; shown under it. */
   readonly doubts: readonly Doubt[];
   /** What the conditions say, by id. */
   readonly declared: ReadonlyMap<string, DeclaredField>;
+  /** What quantities and conditions are called, by id. */
+  readonly labels: ReadonlyMap<string, string>;
+  /** Sources of variance in the order of their looks. */
+  readonly sources: readonly string[];
+  /** Id of the quantity that something else on the page points at. */
+  readonly pointed: string | null;
 }
 
 /** All quantities of the run: the fitted ones first, then what was declared with an uncertainty, then the exact ones. */
-export function QuantityTable({ quantities, isFitted, doubts, declared: conditions }: Props) {
-  const [showsExact, setShowsExact] = useState(false);
+export function QuantityTable({ result, doubts, declared: conditions, labels, sources, pointed }: Props) {
+  const { quantities } = result;
+  const isFitted = result.ending.code === 'fitted';
+  const [opensExact, setOpensExact] = useState(false);
   const fitted = quantities.filter(({ state }) => state === 'fitted');
   const exact = quantities.filter(isExact);
   const declared = quantities.filter((quantity) => quantity.state !== 'fitted' && !isExact(quantity));
-  // Results may rest on conditions that are no quantities, such as the scale of the readings.
-  const labels = new Map([
-    ...[...conditions].map(([id, { label }]) => [id, label] as const),
-    ...quantities.map(({ id, label }) => [id, label] as const),
-  ]);
+  const showsExact = opensExact || exact.some(({ id }) => id === pointed);
 
   const rows = (group: readonly QuantityResult[]) =>
     group.map((quantity) => (
@@ -34,13 +37,15 @@ export function QuantityTable({ quantities, isFitted, doubts, declared: conditio
           quantity={quantity}
           scale={intervalScale(quantity, quantities, conditions.get(quantity.id)?.declaration ?? null)}
           labels={labels}
+          sources={sources}
+          isPointed={quantity.id === pointed}
         />
         {doubts
           .filter(({ place }) => place.quantity === quantity.id)
           .map((doubt) => (
-            <tr key={doubt.code} className="doubt-row">
-              <td colSpan={5}>
-                <DoubtNote doubt={doubt} />
+            <tr key={`${doubt.code} ${doubt.seen}`} className="doubt-row">
+              <td colSpan={4}>
+                <DoubtAtPlace doubt={doubt} result={result} isAtQuantity />
               </td>
             </tr>
           ))}
@@ -59,7 +64,7 @@ export function QuantityTable({ quantities, isFitted, doubts, declared: conditio
           <th scope="col" className="number">
             u
           </th>
-          <th scope="col" colSpan={2}>
+          <th scope="col" className="interval">
             95 % interval
           </th>
         </tr>
@@ -79,12 +84,12 @@ export function QuantityTable({ quantities, isFitted, doubts, declared: conditio
       {exact.length > 0 && (
         <tbody>
           <tr className="group-head">
-            <th colSpan={5} scope="rowgroup">
+            <th colSpan={4} scope="rowgroup">
               <button
                 type="button"
                 className="link"
                 aria-expanded={showsExact}
-                onClick={() => setShowsExact(!showsExact)}
+                onClick={() => setOpensExact(!showsExact)}
               >
                 {showsExact ? 'Hide' : 'Show'} {exact.length} taken as exact
               </button>
@@ -100,13 +105,9 @@ export function QuantityTable({ quantities, isFitted, doubts, declared: conditio
 function GroupHead({ text }: { readonly text: string }) {
   return (
     <tr className="group-head">
-      <th colSpan={5} scope="rowgroup">
+      <th colSpan={4} scope="rowgroup">
         {text}
       </th>
     </tr>
   );
-}
-
-function isExact({ state, u }: QuantityResult): boolean {
-  return state !== 'fitted' && u === null;
 }

@@ -2,7 +2,7 @@ import type { QuantityResult, WhyNoU } from '../../../core/index.ts';
 
 const words: Readonly<Record<WhyNoU, string>> = {
   fixed: 'taken as exact',
-  undetermined: 'the data do not determine it',
+  undetermined: 'not determined by this run',
   bound: 'only one side of it is determined',
   'not-fitted': 'the run was not fitted',
   'no-degrees-of-freedom': 'no point is left to judge the noise by',

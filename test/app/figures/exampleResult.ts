@@ -89,9 +89,9 @@ export function exampleResult(wanted: Wanted = {}): RunResult {
     quantities: [],
     equivalence: pKa.flatMap((_, k) => [
       ...(fitted
-        ? [{ ...step(k), volume_mL: (k + 1) * equivalence_mL, u: 0.004, by: 'fit' as const, remark: '' }]
+        ? [{ ...step(k), volume_mL: (k + 1) * equivalence_mL, u: 0.004, by: 'fit' as const, shares: [], remark: '' }]
         : []),
-      { ...step(k), volume_mL: (k + 1) * equivalence_mL + 0.03, u: null, by: 'derivative', remark: '' },
+      { ...step(k), volume_mL: (k + 1) * equivalence_mL + 0.03, u: null, by: 'derivative', shares: [], remark: '' },
     ]),
     noise: null,
     doubts: [],

@@ -21,11 +21,16 @@ test('the ways to a step stand side by side, steps in the order of their volumes
     volume(1, 'derivative', 4.99),
   ]);
   expect(steps.map(({ step }) => step)).toEqual([1, 2]);
-  expect(steps[0].gran?.volume_mL).toBe(5.01);
-  expect(steps[1].derivative?.volume_mL).toBe(null);
-  expect(steps[1].gran).toBe(null);
+  expect(steps[0].gran.map(({ volume_mL }) => volume_mL)).toEqual([5.01]);
+  expect(steps[1].derivative.map(({ volume_mL }) => volume_mL)).toEqual([null]);
+  expect(steps[1].gran).toEqual([]);
 });
 
 test('a step that only one way sees is kept', () => {
-  expect(groupEquivalence([volume(1, 'gran', 3)])).toMatchObject([{ fit: null, gran: { volume_mL: 3 } }]);
+  expect(groupEquivalence([volume(1, 'gran', 3)])).toMatchObject([{ fit: [], gran: [{ volume_mL: 3 }] }]);
+});
+
+test('lines on either side of a step both stand', () => {
+  const [step] = groupEquivalence([volume(1, 'gran', 3), volume(1, 'gran', 3.02)]);
+  expect(step.gran.map(({ volume_mL }) => volume_mL)).toEqual([3, 3.02]);
 });

@@ -15,7 +15,7 @@ test('an interval is told as it is: two-sided, one-sided, none', () => {
 
 test('whatever has no uncertainty says why', () => {
   expect(whyNoNumber(fittedConstant)).toBe(null);
-  expect(whyNoNumber({ ...fittedConstant, u: null, whyNoU: 'undetermined' })).toBe('the data do not determine it');
+  expect(whyNoNumber({ ...fittedConstant, u: null, whyNoU: 'undetermined' })).toBe('not determined by this run');
   expect(whyNoNumber({ ...fittedConstant, u: null, whyNoU: null })).toBe('no uncertainty could be computed');
 });
 
