@@ -1,14 +1,13 @@
 /** The public face of core/: what the page, the terminal command and the law tests call. */
-export type { Doubt, DoubtCode } from './notice/doubt.ts';
+export type { Doubt } from './notice/doubt.ts';
 export type { Outcome } from './notice/outcome.ts';
 export type { Place } from './notice/place.ts';
-export type { Refusal, RefusalCode } from './notice/refusal.ts';
+export type { Refusal } from './notice/refusal.ts';
 export { analyseRun } from './results/analyseRun.ts';
 export type { Progress } from './results/progress.ts';
 export type * from './results/runResult.ts';
 export { readRuns } from './run/readRuns.ts';
-export type { ReadingKind, RowDecision, Run, RunRow } from './run/run.ts';
-export { assumptions } from './sheet/assumptions.ts';
+export type { RowDecision, Run } from './run/run.ts';
 export { completeSheet } from './sheet/completeSheet.ts';
 export type { Declaration } from './sheet/declaration.ts';
 export { parseSheet } from './sheet/parseSheet.ts';

@@ -14,7 +14,7 @@ const fewestPoints = 5;
 /** Readings that change by less than this in the whole run, in pH, show neither a step nor a buffer region. */
 const flatRange = 0.1;
 /** Points beyond the fitted quantities, so that there is something left to judge the noise by. */
-export const sparePoints = 2;
+const sparePoints = 2;
 
 /** Why a run is not even tried; null where nothing stands against it. */
 export function obstacleToFit(run: Run, used: UsedPoints, shape: ShapeOfRun, sheet: Sheet): RunEnding | null {
@@ -47,7 +47,7 @@ export function obstacleToFit(run: Run, used: UsedPoints, shape: ShapeOfRun, she
   return null;
 }
 
-export function tooFewPoints(count: number, needed: number): RunEnding {
+function tooFewPoints(count: number, needed: number): RunEnding {
   return {
     code: 'too-few-points',
     message: `${count === 1 ? '1 point' : `${count} points`} at different volumes cannot be fitted; at least ${needed} are needed for what is to be found. Titrate with smaller increments or declare more of the quantities.`,

@@ -22,7 +22,7 @@ export const simpleMedium = {
 };
 
 /** Volumes to 1.3 times the last equivalence, evenly spaced, mL. */
-export function simpleVolumes({ pKa, concentration_M, points }: SimpleDesign): number[] {
+function simpleVolumes({ pKa, concentration_M, points }: SimpleDesign): number[] {
   const end = 1.3 * pKa.length * (concentration_M / 0.1) * 25;
   return Array.from({ length: points }, (_, i) => (end * i) / (points - 1));
 }

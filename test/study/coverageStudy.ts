@@ -48,7 +48,7 @@ function declared(sheet: ReturnType<typeof studySheet>, volumes: Float64Array, r
 }
 
 /** Standard uncertainties by id that no unbiased estimate can undercut, with the true noise and values. */
-export function cramerRaoLimits(design: StudyDesign): Map<string, number> {
+function cramerRaoLimits(design: StudyDesign): Map<string, number> {
   const simulated = simulateRun(studyInput(design, null));
   const problem = declared(
     studySheet(design, () => 0),

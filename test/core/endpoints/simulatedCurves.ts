@@ -16,7 +16,7 @@ interface Curve {
 }
 
 export const SAMPLE_VOLUME_ML = 25;
-export const TITRANT_M = 0.1;
+const TITRANT_M = 0.1;
 
 export function evenVolumes(points: number, end_mL: number): number[] {
   return Array.from({ length: points }, (_, i) => (i * end_mL) / (points - 1));
