@@ -65,8 +65,8 @@ export function judgeRungs(
   }));
 }
 
-/** AICc with the log-determinant of the common noise. */
-function criterion({ end, fitted, points, run }: LadderRung): number | null {
+/** AICc with the log-determinant of the common noise; null where the rung was not fitted. */
+export function criterion({ end, fitted, points, run }: LadderRung): number | null {
   const correction = corrected(fitted, points);
   return end === null || correction === null ? null : end.cost + run.whitening.logDeterminant + correction;
 }
@@ -109,13 +109,15 @@ export function chooseRung(rungs: readonly JudgedRung[], sheets: LadderSheets): 
   const believed = sound.filter(({ test }) => test === null || test.p <= decisiveTail);
   const pool = believed.length > 0 ? believed : fitted;
   const best = Math.min(...pool.map(({ aicc }) => aicc ?? Number.POSITIVE_INFINITY));
-  const near = pool
-    .filter(({ aicc }) => aicc !== null && aicc - best <= decisiveDifference)
-    .sort(
-      (a, b) =>
-        a.rung.fitted - b.rung.fitted ||
-        Number(variation(a.rung, sheets) > 0) - Number(variation(b.rung, sheets) > 0) ||
-        (a.aicc ?? 0) - (b.aicc ?? 0),
-    );
-  return near[0].index;
+  const near = pool.filter(({ aicc }) => aicc !== null && aicc - best <= decisiveDifference);
+  const hasPlain = near.some(({ rung }) => variation(rung, sheets) === 0);
+  // A run of a substance is not turned into one without any by what the sheet does not know of.
+  const sensible = near.filter(({ rung }) => !(hasPlain && rung.kind.groups === 0 && variation(rung, sheets) > 0));
+  sensible.sort(
+    (a, b) =>
+      a.rung.fitted - b.rung.fitted ||
+      Number(variation(a.rung, sheets) > 0) - Number(variation(b.rung, sheets) > 0) ||
+      (a.aicc ?? 0) - (b.aicc ?? 0),
+  );
+  return sensible[0].index;
 }

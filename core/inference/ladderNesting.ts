@@ -18,7 +18,7 @@ export function ladderNesting(smaller: LadderRung, larger: LadderRung, sheets: L
   const added = Number(many.carbonate) - Number(few.carbonate) + Number(many.excess) - Number(few.excess);
   if (few.groups === many.groups) {
     const within = Number(few.carbonate) <= Number(many.carbonate) && Number(few.excess) <= Number(many.excess);
-    return within && added === 1 ? { kind: 'same-groups' } : null;
+    return within && added > 0 ? { kind: 'same-groups' } : null;
   }
   if (many.groups !== few.groups + 1 || few.carbonate !== many.carbonate) return null;
   const { design } = larger.run.run;

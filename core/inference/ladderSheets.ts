@@ -20,6 +20,8 @@ export interface RungSheet extends RungKind {
 
 /** All rungs that a sheet allows. */
 export interface LadderSheets {
+  /** Number of groups that the sheet declares; null where it leaves it open. */
+  readonly declared: number | null;
   /** Prefix of the ids of the substance whose groups are counted. */
   readonly prefix: string;
   /** What may be asked of carbonate: nothing, whether it is there, or nothing because it is fitted anyway. */
@@ -32,6 +34,8 @@ export interface LadderSheets {
   readonly largest: number;
   /** What is fitted with so many groups if nothing is asked beyond the sheet; without any group a strong acid or base is. */
   readonly plain: (groups: number) => RungKind;
+  /** The same with all that may be asked for. */
+  readonly richest: (groups: number) => RungKind;
   readonly sheetFor: (kind: RungKind) => RungSheet;
 }
 
@@ -59,6 +63,7 @@ export function ladderSheets(sheet: Sheet): LadderSheets {
   const carbonateQuestion = inWater ? question(sheet[carbonateVessel].carbonate) : 'as-declared';
   const excessQuestion = question(sheet.sample.strongIon);
   return {
+    declared: analyte === undefined ? 0 : analyte.groups.assumed ? null : analyte.groups.value,
     prefix: counted === 0 ? '' : `analyte${counted + 1}.`,
     carbonate: carbonateQuestion,
     excess: excessQuestion,
@@ -70,6 +75,11 @@ export function ladderSheets(sheet: Sheet): LadderSheets {
       groups,
       carbonate: carbonateQuestion === 'always',
       excess: excessQuestion === 'always' || groups === 0,
+    }),
+    richest: (groups) => ({
+      groups,
+      carbonate: carbonateQuestion !== 'as-declared',
+      excess: excessQuestion !== 'as-declared' || groups === 0,
     }),
     sheetFor: (kind) => {
       const varied = kind.groups === 0 ? null : withGroups(declared, kind.groups, acid);

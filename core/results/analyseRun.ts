@@ -112,6 +112,6 @@ function conclude(
     ? describeFittedRun(run, sheet, used, shape, fitted, ladder, ending)
     : {
         ...describeUnfittedRun(run, sheet, used, shape, ending),
-        ladder: ladder === null ? null : describeLadder(ladder, sheet),
+        ladder: ladder === null ? null : describeLadder(ladder),
       };
 }

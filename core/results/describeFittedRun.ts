@@ -87,7 +87,7 @@ export function describeFittedRun(
       degreesOfFreedom: noise.degreesOfFreedom,
     },
     doubts: [...run.doubts, ...allChecks.flatMap((check) => check(analysis))],
-    ladder: ladder === null ? null : describeLadder(ladder, sheet),
+    ladder: ladder === null ? null : describeLadder(ladder),
     correlation: describeCorrelation(fit, weighted),
     curve,
     points,

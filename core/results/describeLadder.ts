@@ -1,6 +1,5 @@
 import { decisiveDifference, type JudgedRung, variation } from '../inference/ladderChoice.ts';
 import type { Ladder } from '../inference/ladderOfRun.ts';
-import type { Sheet } from '../sheet/sheet.ts';
 import { numberOrNull } from './numberOrNull.ts';
 import type { LadderResult } from './runResult.ts';
 
@@ -12,10 +11,9 @@ const worthSaying = 1.2;
 const largestRatio = 1e6;
 
 /** The ladder as figures and in a few sentences. */
-export function describeLadder(ladder: Ladder, sheet: Sheet): LadderResult {
+export function describeLadder(ladder: Ladder): LadderResult {
   const { rungs, chosen, sheets } = ladder;
-  const counted = sheet.sample.analytes.find((_, i) => sheets.prefix === (i === 0 ? '' : `analyte${i + 1}.`));
-  const declared = counted === undefined ? 0 : counted.groups.assumed ? null : counted.groups.value;
+  const { declared } = sheets;
   return {
     rungs: rungs.map(({ rung, cost, aicc, weight, againstIt, test }) => ({
       groups: rung.kind.groups,
@@ -63,9 +61,9 @@ function answer({ rungs, chosen }: Ladder, declared: number | null): string {
 /** What one more group would buy, and what speaks against it. */
 function nextGroup({ rungs, chosen }: Ladder): string {
   const here = rungs[chosen];
-  const next = rungs.find(
-    ({ rung }) => rung.kind.groups === here.rung.kind.groups + 1 && sameVariation(rung.kind, here),
-  );
+  const richer = rungs.filter(({ rung }) => rung.kind.groups === here.rung.kind.groups + 1);
+  const best = [...richer].sort((a, b) => (a.aicc ?? Infinity) - (b.aicc ?? Infinity));
+  const next = richer.find(({ rung }) => sameVariation(rung.kind, here)) ?? best[0];
   if (next === undefined) return '';
   if (next.aicc === null) return 'One more could not be fitted.';
   const against = reasonsAgainst(next);
@@ -113,8 +111,9 @@ function alternatives({ rungs, chosen, sheets }: Ladder): string {
   const words = equal.map((other) => {
     const { groups } = other.rung.kind;
     const varied = variation(other.rung, sheets);
-    const extra = varied === 0 ? '' : ` with ${nameVariation(varied, sheets.carbonateVessel, other)}`;
-    return `${groups === 0 ? 'a strong acid or base alone' : counted(groups)}${extra}`;
+    const extra = varied === 0 ? '' : nameVariation(varied, sheets.carbonateVessel, other);
+    if (groups === 0) return `${extra === '' ? 'a strong acid or base' : extra} alone`;
+    return extra === '' ? counted(groups) : `${counted(groups)} with ${extra}`;
   });
   return `${capital(words.join(', or '))} would explain it equally well (${evidence(here, equal[0])}).`;
 }

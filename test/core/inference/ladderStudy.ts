@@ -50,7 +50,7 @@ export function ladderOfDesign(design: SimpleDesign, seed: number, noise: 'decla
 }
 
 /** Whether every group lies at a pH that was read. */
-export function isInsideReadings(design: SimpleDesign): boolean {
+function isInsideReadings(design: SimpleDesign): boolean {
   const { readings } = simulateDesign(design);
   return design.pKa.every((pKa) => pKa > Math.min(...readings) && pKa < Math.max(...readings));
 }
