@@ -96,7 +96,7 @@ describe('a sheet that leaves too much to be fitted', () => {
 
   it('gives no value to what is open, names it, and prints no number that is none', () => {
     fc.assert(
-      fc.property(fc.subarray(Object.keys(freed) as Freed[], { minLength: 2 }), (names) => {
+      fc.property(fc.subarray(Object.keys(freed) as Freed[], { minLength: 2, maxLength: 5 }), (names) => {
         const result = fitAsDeclared(runOf(run.volumes_mL, run.readings), sheetOf(diprotic, merged(names)));
         expect(everyNumberIsFinite(result)).toBe(true);
         if (result.ending.code !== 'fitted') return;
@@ -109,9 +109,9 @@ describe('a sheet that leaves too much to be fitted', () => {
           expect(said, id).toContain(label);
         }
       }),
-      lawOptions(24),
+      lawOptions(16),
     );
     // Such sheets may end anywhere, but they are no excuse for not fitting.
-    expect(fitted).toBeGreaterThan(18);
+    expect(fitted).toBeGreaterThan(12);
   }, 30_000);
 });
