@@ -137,13 +137,15 @@ export class LadderClimb {
     const groups = kind.groups - 1;
     const smaller = this.find({ ...kind, groups, excess: kind.excess || groups === 0 });
     if (smaller === undefined || smaller.end === null) return null;
-    for (const { name, sheet } of ladderRivals(smaller.kind.sheet)) {
+    for (const { name, id, sheet, range } of ladderRivals(smaller.kind.sheet)) {
       const rival = new LadderRung(this.sheets, { ...smaller.kind, sheet }, this.volumes, this.readings);
       rival.weigh(this.noise);
       rival.fitFrom(carriedOver(smaller, rival));
       this.otherEvaluations += rival.weighted.curveEvaluations;
       const other = criterion(rival);
-      if (other !== null && other <= aicc + decisiveDifference) return name;
+      const value = rival.end?.values.get(id) ?? Number.NaN;
+      const canBe = value >= range[0] && value <= range[1];
+      if (canBe && other !== null && other <= aicc + decisiveDifference) return name;
     }
     return null;
   }
