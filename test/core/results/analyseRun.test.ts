@@ -322,10 +322,21 @@ describe('the 95 % interval', () => {
 
 describe('an assumed value', () => {
   it('is named by every result that it would move noticeably', () => {
-    const result = workUpExperiment(acid, { burette: { gain: null }, titrant: { concentration_M: null } });
+    const result = workUpExperiment(acid, { burette: { gain: null }, sample: { volume_mL: null } });
     expect(find(result, 'burette.gain').state).toBe('assumed');
-    expect(find(result, 'concentration').restsOn).toContain('titrant.concentration');
+    expect(find(result, 'concentration').restsOn).toContain('sample.volume');
     expect(workUpExperiment(acid).quantities.every(({ restsOn }) => restsOn.length === 0)).toBe(true);
+  });
+});
+
+describe('a titrant strength that nobody has declared', () => {
+  it('is found from the alkaline end, and then nothing rests on the value assumed for it', () => {
+    const result = workUpExperiment(acid, { titrant: { concentration_M: null } });
+    const strength = find(result, 'titrant.concentration');
+    expect(strength.state).toBe('assumed');
+    expect(Math.abs((strength.value ?? 0) - 0.1) / (strength.u ?? 0)).toBeLessThan(4);
+    expect(strength.u).toBeLessThan(0.01);
+    expect(find(result, 'concentration').restsOn).not.toContain('titrant.concentration');
   });
 });
 
