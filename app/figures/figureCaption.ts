@@ -70,7 +70,8 @@ function residuals(run: FigureRun): string {
 }
 
 function apart({ result }: FigureRun): string {
-  const lines = result.robust?.distrusted.map(({ line }) => String(line)) ?? [];
+  const used = new Set(result.points.filter((point) => point.used).map(({ line }) => line));
+  const lines = result.robust?.distrusted.filter(({ line }) => used.has(line)).map(({ line }) => String(line)) ?? [];
   if (lines.length === 0) return '';
   return `Diamonds: too far from the curve for chance, ${lines.length === 1 ? 'line' : 'lines'} ${listed(lines)}.`;
 }

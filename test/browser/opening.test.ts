@@ -20,3 +20,12 @@ browserTest('the page opens from a server, with its icon and manifest', async ({
     expect(answer.headers()['content-type'], address).not.toContain('text/html');
   }
 });
+
+browserTest('the licences of what is built in stand beside the page, those of the worker too', async ({ page }) => {
+  const answer = await page.context().request.get(`${inject('servedAddress')}licences.txt`);
+  expect(answer.status()).toBe(200);
+  const text = await answer.text();
+  for (const name of ['plotly.js', 'react-dom', 'papaparse', 'ml-levenberg-marquardt'])
+    expect(text).toContain(`${name} `);
+  expect(text).toMatch(/MIT/);
+});

@@ -47,7 +47,7 @@ export function EquivalenceTable({ results, labels, sources }: Props) {
               {ways.map(({ by }) => (
                 <td key={by} className="number">
                   {step[by].length === 0 ? (
-                    <small>{by === 'fit' ? 'not in the model' : 'not seen'}</small>
+                    <small>{by === 'fit' ? 'none' : 'not seen'}</small>
                   ) : (
                     step[by].map((result) => <Volume key={result.remark} result={result} />)
                   )}

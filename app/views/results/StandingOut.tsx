@@ -45,7 +45,9 @@ export function StandingOut({ result, labels }: Props) {
       {moves.length > 0 && (
         <details className="how">
           <summary>
-            {distrusted.length === 0 ? 'How each answer would move' : 'How each answer would move without'}
+            {distrusted.length === 0
+              ? 'How each answer would move'
+              : `How each answer would move without ${distrusted.length === 1 ? 'it' : 'them'}`}
           </summary>
           <table className="moves">
             <caption className="unseen">Moves of the answers where distant points count less</caption>

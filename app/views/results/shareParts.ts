@@ -13,7 +13,7 @@ export interface SharePart {
 const leastShare = 0.05;
 const mostNamed = 3;
 /** So many looks can be told apart. */
-export const shareLooks = 6;
+const shareLooks = 6;
 
 /** Sources in the order of their looks, for everything on the page that has parts. */
 export function resultSources({ quantities, equivalence }: RunResult): readonly string[] {

@@ -30,6 +30,8 @@ interface Wanted {
   readonly speciation?: boolean;
   /** Source lines left out of the fit; the first point stands in line 2. */
   readonly excluded?: readonly number[];
+  /** Source lines that a robust fit does not believe. */
+  readonly distrusted?: readonly number[];
 }
 
 /** The result of a simulated run as a perfect fit would give it, noise of the readings included. */
@@ -97,7 +99,12 @@ export function exampleResult(wanted: Wanted = {}): RunResult {
     doubts: [],
     ladder: null,
     correlation: { ids: [], matrix: [] },
-    robust: null,
+    robust: {
+      distrusted: rows
+        .filter(({ line }) => wanted.distrusted?.includes(line))
+        .map(({ line, volume_mL }) => ({ line, volume_mL, weight: 0 })),
+      moves: [],
+    },
     curve: fitted
       ? {
           volume_mL: grid.volumes_mL,
