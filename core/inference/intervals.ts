@@ -1,4 +1,3 @@
-import type { CovarianceEstimate } from '../fit/covariance.ts';
 import type { ProblemFit } from '../fit/fitProblem.ts';
 import { parameterGradient, uncertaintyOf } from '../fit/uncertaintyOf.ts';
 import { WeightedProblem } from '../fit/weightedProblem.ts';
@@ -31,6 +30,8 @@ export interface Intervals {
   readonly quantities: readonly (QuantityInterval | null)[];
   /** Parameters below the minimum that a profile came upon; null where the minimum stood. */
   readonly better: Float64Array | null;
+  /** Curves computed for them, for the benchmark. */
+  readonly curveEvaluations: number;
 }
 
 /**
@@ -68,11 +69,11 @@ export function intervalsOf(fit: ProblemFit, index: number, pHRange: readonly [n
     const toQuantity = (end: number | null) => (end === null ? null : nominal + sensitivity * end);
     return { u, degreesOfFreedom, interval: [toQuantity(profile.lower), toQuantity(profile.upper)], profile };
   });
-  return { quantities, better };
+  return { quantities, better, curveEvaluations: minimum.problem.curveEvaluations };
 }
 
 /** The minimum with its weights, in a problem of its own, so that profiles leave the fit as it is. */
-export function freeze(fit: ProblemFit): FrozenMinimum & { readonly covariance: CovarianceEstimate } {
+export function freeze(fit: ProblemFit): FrozenMinimum & { readonly problem: WeightedProblem } {
   const problem = new WeightedProblem(fit.weighted.problem);
   problem.weighLike(fit.weighted, fit.noise);
   const residuals = new Float64Array(problem.residualCount);

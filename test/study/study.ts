@@ -1,3 +1,4 @@
+import { countLadders } from '../core/inference/ladderStudy.ts';
 import { boundErrors } from './boundErrors.ts';
 import { coverageOf } from './coverageStudy.ts';
 import { studyDesigns } from './studyDesigns.ts';
@@ -8,6 +9,8 @@ const firstSeed = 1;
 /** Bounds are compared with dense profiles where there are this many, and so many of them. */
 const fewestBounds = 10;
 const comparedBounds = 40;
+/** Ladders climbed with either kind of noise. */
+const ladderRuns = 400;
 
 const runs = Number(process.argv[2] ?? usualRuns);
 const only = process.argv[3];
@@ -31,3 +34,12 @@ for (const [number, design] of studyDesigns.entries()) {
     );
   }
 }
+
+if (only === undefined)
+  for (const noise of ['declared', 'undeclared'] as const) {
+    const { right, tooMany, tooFew, meanEvaluations, mostEvaluations } = countLadders(ladderRuns, firstSeed, noise);
+    const share = (count: number) => ((100 * count) / ladderRuns).toFixed(1);
+    console.log(
+      `ladder, noise ${noise}: right ${share(right)} % (at least 95), too many ${share(tooMany)} % (at most 2), too few ${share(tooFew)} %, of ${ladderRuns}; curves ${meanEvaluations.toFixed(0)} in the mean, ${mostEvaluations} at most`,
+    );
+  }
