@@ -72,8 +72,9 @@ export default defineConfig(({ mode }) => {
             environment: 'node',
             include: ['test/browser/**/*.test.ts'],
             globalSetup: fromHere('test/browser/globalSetup.ts'),
-            testTimeout: 30_000,
-            hookTimeout: 30_000,
+            // Many times what a quiet machine needs: a busy one is slow, not wrong.
+            testTimeout: 90_000,
+            hookTimeout: 90_000,
             // After the others, so that what is awaited in the browser does not compete with them.
             sequence: { groupOrder: 1 },
           },
