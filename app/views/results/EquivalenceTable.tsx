@@ -62,6 +62,7 @@ export function EquivalenceTable({ results, labels, sources }: Props) {
         <ul>
           {steps.map((step, k) => (
             <li key={`${step.analyte} ${step.step}`}>
+              {/^\d/.test(words[k].name) ? 'step ' : ''}
               {words[k].name} {words[k].remark}
               <Meanings step={step} labels={labels} sources={sources} />
             </li>
