@@ -10,6 +10,8 @@ export type DoubtCode =
   | 'column-guessed'
   | 'unit-guessed'
   | 'run-split-guessed'
+  | 'volume-meaning-guessed'
+  | 'dose-missing'
   | 'delimiter-guessed'
   // the fit
   | 'too-few-points'

@@ -2,6 +2,7 @@ import type { Doubt } from '../notice/doubt.ts';
 import type { ColumnGroup } from './columnGroup.ts';
 import type { ColumnRole } from './columnRole.ts';
 import { type ColumnPair, guessColumns } from './guessColumns.ts';
+import type { ReadingOverrules } from './readingChoices.ts';
 import { sampleColumn } from './sampleColumn.ts';
 import type { SectionColumns } from './sectionColumns.ts';
 import { toColumnGroup } from './toColumnGroup.ts';
@@ -11,6 +12,8 @@ export interface ColumnChoice {
   readonly doubts: readonly Doubt[];
   /** Whether the header named both the volume and the reading. */
   readonly named: boolean;
+  /** Whether volume and reading were told by their figures, with or against the header. */
+  readonly guessed: boolean;
 }
 
 /** Roles that a column keeps whatever its figures look like. */
@@ -24,9 +27,14 @@ const NEVER_GUESSED: ReadonlySet<ColumnRole> = new Set<ColumnRole>([
  * columns each with a reading, or one with several readings of a kind, make
  * several groups. Undefined where two such columns cannot be found.
  */
-export function chooseColumns(columns: SectionColumns, fileName: string): ColumnChoice | undefined {
+export function chooseColumns(
+  columns: SectionColumns,
+  fileName: string,
+  overrules: ReadingOverrules,
+): ColumnChoice | undefined {
   const line = columns.section.headerLine ?? columns.section.rows[0].line;
-  const pairs = namedPairs(columns);
+  const all = namedPairs(columns);
+  const pairs = overrules.runSplit === 'none' ? all.slice(0, 1) : all;
   const named = pairs.length > 0;
   const guessed = named ? undefined : guessedPair(columns);
   const swapped = pairs.length === 1 && looksSwapped(columns, pairs[0]);
@@ -40,12 +48,13 @@ export function chooseColumns(columns: SectionColumns, fileName: string): Column
   const doubts: Doubt[] = [];
   const sample = sampleColumn(columns);
   const groups = chosen.map((pair): ColumnGroup => {
-    const { group, notices } = toColumnGroup(columns, pair, swapped || guessed !== undefined, sample);
+    const guess = swapped || guessed !== undefined;
+    const { group, notices } = toColumnGroup(columns, pair, guess, sample, overrules.volumeMeaning);
     for (const { column, ...notice } of notices) doubts.push({ ...notice, place: { file: fileName, line, column } });
     const label = chosen.length > 1 ? labelOf(columns, pair, chosen) : undefined;
     return label === undefined ? group : { ...group, label };
   });
-  return { groups, named, doubts };
+  return { groups, named, guessed: swapped || guessed !== undefined, doubts };
 }
 
 function columnsOf(columns: SectionColumns, role: ColumnRole): number[] {
@@ -54,9 +63,16 @@ function columnsOf(columns: SectionColumns, role: ColumnRole): number[] {
   });
 }
 
+/** Columns of volumes added so far, or where there are none those of single additions. */
+function volumesOf(columns: SectionColumns): number[] {
+  const volumes = columnsOf(columns, 'volume');
+  const decided = columnsOf(columns, 'increment').filter((column) => columns.headers[column].roleDecided);
+  return volumes.length > 0 && decided.length === 0 ? volumes : columnsOf(columns, 'increment');
+}
+
 /** Pairs for which the header names volume and reading. */
 function namedPairs(columns: SectionColumns): ColumnPair[] {
-  const volumes = columnsOf(columns, 'volume');
+  const volumes = volumesOf(columns);
   const pH = columnsOf(columns, 'pH');
   const mV = columnsOf(columns, 'mV');
   const either = columnsOf(columns, 'reading');
@@ -83,7 +99,7 @@ function guessedPair(columns: SectionColumns): ColumnPair | undefined {
     const role = columns.headers[column].role;
     return role === undefined || !NEVER_GUESSED.has(role);
   });
-  const volumes = columnsOf(columns, 'volume');
+  const volumes = volumesOf(columns);
   const readings = [...columnsOf(columns, 'pH'), ...columnsOf(columns, 'mV'), ...columnsOf(columns, 'reading')];
   return guessColumns(
     columns.statistics,
@@ -97,6 +113,7 @@ const NEARLY_ZERO = 0.02;
 
 /** Headers over the wrong columns: the "pH" counts up past 14 from zero while the "volume" stays within 0–14. */
 function looksSwapped({ statistics, headers }: SectionColumns, { volume, reading }: ColumnPair): boolean {
+  if (headers[volume].roleDecided || headers[reading].roleDecided) return false;
   const named = statistics[reading];
   const other = statistics[volume];
   if (headers[reading].role !== 'pH' || named.count < 5 || named.maximum === named.minimum) return false;

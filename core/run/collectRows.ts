@@ -1,3 +1,4 @@
+import type { Doubt } from '../notice/doubt.ts';
 import type { Refusal } from '../notice/refusal.ts';
 import { parseNumber } from '../table/parseNumber.ts';
 import { quoteCell } from '../table/quoteCell.ts';
@@ -7,15 +8,20 @@ import { unitBehind } from '../table/unitBehind.ts';
 import { millivolts } from '../units/potential.ts';
 import { millilitres } from '../units/volume.ts';
 import type { ColumnGroup } from './columnGroup.ts';
+import { readTime } from './readTime.ts';
 import type { RowDecision, RunRow } from './run.ts';
 import type { SectionColumns } from './sectionColumns.ts';
+import { volumesAdded } from './volumesAdded.ts';
 
 export interface CollectedRows {
   readonly rows: readonly RunRow[];
   readonly notAccepted: readonly Refusal[];
+  /** 'dose-missing' where the volumes are sums of which one part is not known. */
+  readonly doubts: readonly Doubt[];
 }
 
 const USED: RowDecision = { use: 'used' };
+const NOTHING = {};
 
 /** Largest volume that any titration doses, mL; beyond it a number would overflow later sums. */
 const LARGEST_VOLUME_ML = 1e5;
@@ -34,46 +40,86 @@ export function collectRows(
 ): CollectedRows {
   const rows: RunRow[] = [];
   const notAccepted: Refusal[] = [];
-  const volumes = columns.section.values[group.volume];
-  const readings = columns.section.values[group.reading];
-  for (const index of indices) {
-    const source = columns.section.rows[index];
-    const misfit = widthRefusal(columns, source, delimiter, file);
-    if (misfit !== undefined) {
-      notAccepted.push(misfit);
-      continue;
+  const { section } = columns;
+  const readings = section.values[group.reading];
+  const shown_mL = new Float64Array(indices.length);
+  indices.forEach((index, at) => {
+    const { cells } = section.rows[index];
+    const fits = fitsWidth(columns, cells, delimiter);
+    shown_mL[at] = fits
+      ? toMillilitres(section.values[group.volume][index], cells[group.volume] ?? '', group)
+      : Number.NaN;
+  });
+  const { added_mL, firstGap } = volumesAdded(shown_mL, group.volumeMeaning);
+  indices.forEach((index, at) => {
+    const source = section.rows[index];
+    if (!fitsWidth(columns, source.cells, delimiter)) {
+      notAccepted.push(widthRefusal(columns, source, file));
+      return;
     }
-    if (Number.isNaN(volumes[index]) || Number.isNaN(readings[index])) {
-      notAccepted.push(cellRefusal(columns, group, source, Number.isNaN(volumes[index]), file));
-      continue;
+    const volume_mL = added_mL[at];
+    const reading = toReading(readings[index], source.cells[group.reading] ?? '', group);
+    if (!Number.isFinite(volume_mL) || !Number.isFinite(reading)) {
+      notAccepted.push(cellRefusal(columns, group, source, !Number.isFinite(volume_mL), file));
+      return;
     }
-    const volume_mL = toMillilitres(volumes[index], source.cells[group.volume], group);
-    const reading = toReading(readings[index], source.cells[group.reading], group);
-    if (volume_mL === undefined || reading === undefined) {
-      notAccepted.push(cellRefusal(columns, group, source, volume_mL === undefined, file));
-      continue;
-    }
-    rows.push({ line: source.line, volume_mL, reading, decision: decide(volume_mL, reading, group) });
-  }
-  return { rows, notAccepted };
+    const decision = decide(volume_mL, reading, group);
+    rows.push({ line: source.line, volume_mL, reading, ...besides(columns, group, index), decision });
+  });
+  const doubts = firstGap < 0 ? [] : [doseMissing(section.rows[indices[firstGap]].line, file)];
+  return { rows, notAccepted, doubts };
 }
 
-/** Undefined where the cell names a unit of something else, or the number leaves the range of doubles. */
-function toMillilitres(value: number, cell: string, group: ColumnGroup): number | undefined {
-  const unit = unitBehind(cell) ?? group.volumeUnit;
-  if (unit !== 'mL' && unit !== 'µL' && unit !== 'L') return undefined;
+/** Temperature and time of a row, as far as the file gives them. */
+function besides(
+  { section }: SectionColumns,
+  group: ColumnGroup,
+  index: number,
+): { temperature_C?: number; time_s?: number } {
+  if (group.temperature === undefined && group.time === undefined) return NOTHING;
+  const found: { temperature_C?: number; time_s?: number } = {};
+  if (group.temperature !== undefined) {
+    const value = section.values[group.temperature][index];
+    const temperature = group.temperatureUnit === 'K' ? value - 273.15 : value;
+    if (Number.isFinite(temperature)) found.temperature_C = temperature;
+  }
+  if (group.time !== undefined) {
+    const time = readTime(
+      section.values[group.time][index],
+      section.rows[index].cells[group.time] ?? '',
+      group.timeUnit,
+    );
+    if (time !== undefined) found.time_s = time;
+  }
+  return found;
+}
+
+function doseMissing(line: number, file: string): Doubt {
+  return {
+    code: 'dose-missing',
+    seen: `The addition in line ${line} is not known, and the volumes after it are sums of additions.`,
+    means: 'Every volume from there on is too small by what was added.',
+    remedy: 'Write the addition into the file, or leave out the rows after it.',
+    place: { file, line },
+  };
+}
+
+/** NaN where the cell names a unit of something else, or the number leaves the range of doubles. */
+function toMillilitres(value: number, cell: string, group: ColumnGroup): number {
+  const unit = (group.volumeUnitDecided ? undefined : unitBehind(cell)) ?? group.volumeUnit;
+  if (unit !== 'mL' && unit !== 'µL' && unit !== 'L') return Number.NaN;
   return finite(millilitres(value, unit));
 }
 
-function toReading(value: number, cell: string, group: ColumnGroup): number | undefined {
-  const unit = unitBehind(cell);
-  if (group.readingKind === 'pH') return unit === undefined || unit === 'pH' ? value : undefined;
-  if (unit !== undefined && unit !== 'mV' && unit !== 'V') return undefined;
+function toReading(value: number, cell: string, group: ColumnGroup): number {
+  const unit = group.readingUnitDecided ? undefined : unitBehind(cell);
+  if (group.readingKind === 'pH') return unit === undefined || unit === 'pH' ? value : Number.NaN;
+  if (unit !== undefined && unit !== 'mV' && unit !== 'V') return Number.NaN;
   return finite(millivolts(value, unit ?? group.potentialUnit));
 }
 
-function finite(value: number): number | undefined {
-  return Number.isFinite(value) ? value : undefined;
+function finite(value: number): number {
+  return Number.isFinite(value) ? value : Number.NaN;
 }
 
 function decide(volume_mL: number, reading: number, group: ColumnGroup): RowDecision {
@@ -90,21 +136,18 @@ function excluded(why: string): RowDecision {
 }
 
 /** A row with more numbers than there are columns, or with cells missing where only blanks part them, is shifted. */
-function widthRefusal(
-  { section, marks }: SectionColumns,
-  { line, cells }: TableRow,
+function fitsWidth(
+  { section: { width }, marks }: SectionColumns,
+  cells: readonly string[],
   delimiter: Delimiter,
-  file: string,
-): Refusal | undefined {
-  const { width } = section;
-  let found = cells.length;
-  if (found > width) {
-    const surplus = cells.findIndex((cell, column) => column >= width && typeof parseNumber(cell, marks) === 'number');
-    if (surplus < 0) return undefined;
-  } else if (delimiter !== 'spaces' || found === width) {
-    return undefined;
-  }
-  found = cells.filter((cell) => cell.trim() !== '').length;
+): boolean {
+  if (cells.length === width) return true;
+  if (cells.length < width) return delimiter !== 'spaces';
+  return !cells.some((cell, column) => column >= width && typeof parseNumber(cell, marks) === 'number');
+}
+
+function widthRefusal({ section: { width } }: SectionColumns, { line, cells }: TableRow, file: string): Refusal {
+  const found = cells.filter((cell) => cell.trim() !== '').length;
   return {
     code: 'row-wrong-width',
     message: `The row has ${found} ${found === 1 ? 'cell' : 'cells'} where the table has ${width} columns, so that its numbers cannot be told apart: ${quoteCell(cells.join(' '))}.`,

@@ -1,10 +1,14 @@
 import { type ExportUnit, readUnit } from '../units/readUnit.ts';
 import type { ColumnRole } from './columnRole.ts';
+import { plainWords } from './plainWords.ts';
 
 export interface HeaderReading {
   /** Undefined where the name says nothing known. */
   readonly role?: ColumnRole;
   readonly unit?: ExportUnit;
+  /** Whether a person has decided them. */
+  readonly roleDecided?: boolean;
+  readonly unitDecided?: boolean;
 }
 
 // Words of English, German, French, Spanish, Italian, Portuguese and Dutch headers, without accents, in lower case.
@@ -13,7 +17,9 @@ const WORDS = {
   derivative: words(
     'derivative derivat* ableitung* derive* derivad* derivat* afgeleid* erc drift* slope steigung pente pendiente pendenza helling',
   ),
-  increment: words('increment* inkrement* schrittweite paso* dosierschritt*'),
+  increment: words(
+    'increment* inkrement* schrittweite paso* dosierschritt* dose doses dosis dosi portion* incremento*',
+  ),
   time: words(
     'time timestamp zeit* uhrzeit temps tiempo* tempo* tijd* hora horas heure* ora elapsed date datum fecha data duration dauer',
   ),
@@ -42,10 +48,10 @@ const VOLUME_STEP = /^(?:d|delta) ?\W* ?v(?:ol\w*)?(?![a-z])/;
 
 /** What a header cell, with a units row under it where there is one, says about its column. */
 export function roleFromHeader(header: string, unitsRow: string): HeaderReading {
-  const name = plain(header);
+  const name = plainWords(header);
   const { base, unit: unitInName } = splitUnit(header);
-  const unit = readUnit(unitsRow) ?? unitInName;
-  const role = roleOf(name, plain(base), unit);
+  const unit = unitOf(unitsRow) ?? unitInName;
+  const role = roleOf(name, plainWords(base), unit);
   // Units of derivatives and drifts are not followed up.
   if (role === 'derivative') return { role };
   return { ...(role === undefined ? {} : { role }), ...(unit === undefined ? {} : { unit }) };
@@ -102,22 +108,16 @@ function splitUnit(header: string): { readonly base: string; readonly unit?: Exp
     /^(.*?)[\s_]+(?:in\s+)?([^\s_]+)$/,
   ]) {
     const match = pattern.exec(text);
-    const unit = match === null ? undefined : readUnit(match[2]);
+    const unit = match === null ? undefined : unitOf(match[2]);
     if (match !== null && unit !== undefined && unit !== 'pH') return { base: match[1], unit };
   }
   const whole = readUnit(text);
   return whole === undefined || whole === 'V' || whole === 'pH' ? { base: text } : { base: '', unit: whole };
 }
 
-/** Lower case without accents; the letters that stand for a difference become "d". */
-function plain(text: string): string {
-  return text
-    .normalize('NFD')
-    .replace(/[\u0300-\u036f]/g, '')
-    .toLowerCase()
-    .replace(/[δ∆∂]/g, 'd')
-    .replaceAll('_', ' ')
-    .trim();
+/** A lone K is kelvin over a column; behind a figure it could be anything. */
+function unitOf(text: string): ExportUnit | undefined {
+  return /^\W*K\W*$/.test(text) ? 'K' : readUnit(text);
 }
 
 function words(list: string): (parts: readonly string[]) => boolean {

@@ -9,6 +9,8 @@ const ROWS_PER_LABEL = 3;
  * number the rows or give the time of day have no repeating labels.
  */
 export function sampleColumn({ section, headers, statistics }: SectionColumns): number | undefined {
+  const decided = headers.findIndex(({ role, roleDecided }) => role === 'sample' && roleDecided === true);
+  if (decided >= 0) return decided;
   const named = headers.findIndex(({ role }, column) => role === 'sample' && labelsRepeat(section.rows, column));
   if (named >= 0) return named;
   const worded = headers.findIndex(({ role }, column) => {

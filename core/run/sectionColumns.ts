@@ -2,6 +2,8 @@ import type { Dialect } from '../table/dialect.ts';
 import type { NumberMarks } from '../table/numberMarks.ts';
 import type { TableSection } from '../table/table.ts';
 import { type ColumnStatistics, columnStatistics } from './columnStatistics.ts';
+import { overruleColumns } from './overruleColumns.ts';
+import type { ReadingOverrules } from './readingChoices.ts';
 import { type HeaderReading, roleFromHeader } from './roleFromHeader.ts';
 
 /** The columns of one table, read. */
@@ -12,8 +14,12 @@ export interface SectionColumns {
   readonly headers: readonly HeaderReading[];
 }
 
-/** Looks at the figures and the header of every column. */
-export function sectionColumns(section: TableSection, { delimiter, marks }: Dialect): SectionColumns {
+/** Looks at the figures and the header of every column, and at what a person has decided about it. */
+export function sectionColumns(
+  section: TableSection,
+  { delimiter, marks }: Dialect,
+  overrules: ReadingOverrules,
+): SectionColumns {
   const headers = section.names.map((name, column) => roleFromHeader(name, section.units[column]));
   // Parted at blanks, a title such as "pH titration" looks like a header; a real one names both columns.
   const isTitle = delimiter === 'spaces' && !namesBoth(headers);
@@ -21,7 +27,7 @@ export function sectionColumns(section: TableSection, { delimiter, marks }: Dial
     section,
     marks,
     statistics: section.values.map(columnStatistics),
-    headers: isTitle ? headers.map(() => ({})) : headers,
+    headers: overruleColumns(isTitle ? headers.map(() => ({})) : headers, overrules),
   };
 }
 

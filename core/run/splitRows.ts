@@ -1,4 +1,5 @@
 import type { ColumnGroup } from './columnGroup.ts';
+import type { RunSplit } from './readingChoices.ts';
 import type { SectionColumns } from './sectionColumns.ts';
 
 /** Rows of a table, as indices in order, that make one run. */
@@ -16,17 +17,49 @@ const POINTS_AFTER = 3;
 /** Within this share of the range of volumes a value counts as the end, or as the start, of a run. */
 const NEAR = 0.1;
 
-/** Parts the rows of a table into runs: by the labels of a sample column, and where the volume starts again. */
-export function splitRows(columns: SectionColumns, group: ColumnGroup): readonly RowGroup[] {
-  const labelled = byLabel(columns, group.sample);
+/**
+ * Parts the rows of a table into runs: by the labels of a sample column, and
+ * where the volume starts again, or only as a person has asked.
+ */
+export function splitRows(columns: SectionColumns, group: ColumnGroup, asked?: RunSplit): readonly RowGroup[] {
+  const labelled = byLabel(columns, asked === undefined || asked === 'sampleColumn' ? group.sample : undefined);
+  if (asked !== undefined && asked !== 'restart') return labelled.map((part) => ({ ...part, byRestart: false }));
+  if (group.volumeMeaning === 'increments') return labelled.flatMap((part) => byZeroIncrement(columns, group, part));
+  const sign = group.volumeMeaning === 'countingDown' ? -1 : 1;
+  const volumes = columns.section.values[group.volume];
+  const upwards = sign > 0 ? volumes : volumes.map((value) => -value);
   return labelled.flatMap(({ label, rows }) => {
-    const parts = byRestart(columns.section.values[group.volume], rows);
+    const parts = byRestart(upwards, rows);
     return parts.map((part, index) => ({
       ...(label === undefined ? {} : { label: parts.length > 1 ? `${label} ${index + 1}` : label }),
       rows: part,
       byRestart: parts.length > 1,
     }));
   });
+}
+
+/** Additions start again with one of nothing, where the reading goes back to where it was at first. */
+function byZeroIncrement(
+  columns: SectionColumns,
+  group: ColumnGroup,
+  { label, rows }: { readonly label?: string; readonly rows: readonly number[] },
+): RowGroup[] {
+  const values = columns.section.values[group.volume];
+  const readings = columns.section.values[group.reading];
+  const parts: number[][] = [[]];
+  rows.forEach((row, at) => {
+    const current = parts[parts.length - 1];
+    const goesBack =
+      at > 0 && Math.abs(readings[row] - readings[current[0]]) < Math.abs(readings[row] - readings[rows[at - 1]]);
+    const longEnough = current.length >= POINTS_BEFORE && at + POINTS_AFTER <= rows.length;
+    if (values[row] === 0 && longEnough && goesBack) parts.push([]);
+    parts[parts.length - 1].push(row);
+  });
+  return parts.map((part, index) => ({
+    ...(label === undefined ? {} : { label: parts.length > 1 ? `${label} ${index + 1}` : label }),
+    rows: part,
+    byRestart: parts.length > 1,
+  }));
 }
 
 function byLabel(columns: SectionColumns, sample: number | undefined): { label?: string; rows: number[] }[] {

@@ -1,10 +1,15 @@
 import type { Doubt } from '../notice/doubt.ts';
 import { unitBehind } from '../table/unitBehind.ts';
+import type { ExportUnit } from '../units/readUnit.ts';
+import { columnBeside } from './columnBeside.ts';
 import type { ColumnGroup } from './columnGroup.ts';
 import type { ColumnRole } from './columnRole.ts';
 import type { ColumnPair } from './guessColumns.ts';
+import { plainWords } from './plainWords.ts';
+import type { VolumeMeaning } from './readingChoices.ts';
 import { readingKind } from './readingKind.ts';
 import type { SectionColumns } from './sectionColumns.ts';
+import { volumeMeaning } from './volumeMeaning.ts';
 
 /** A doubt about a column, without its place but for the column, counted from 1. */
 export type ColumnNotice = Pick<Doubt, 'code' | 'seen' | 'means' | 'remedy'> & { readonly column: number };
@@ -26,6 +31,7 @@ export function toColumnGroup(
   { volume, reading }: ColumnPair,
   guessed: boolean,
   sample: number | undefined,
+  askedMeaning: VolumeMeaning | undefined,
 ): { readonly group: ColumnGroup; readonly notices: readonly ColumnNotice[] } {
   const { headers, statistics } = columns;
   const notices: ColumnNotice[] = [];
@@ -38,7 +44,15 @@ export function toColumnGroup(
       : headerRole === undefined || headerRole === 'reading'
         ? roleOfCells(readingUnit)
         : headerRole;
-  const { kind, by } = readingKind(role, readingUnit === 'V', statistics[reading]);
+  const decidedKind = headers[reading].roleDecided && (role === 'pH' || role === 'mV') ? role : undefined;
+  const { kind, by } =
+    decidedKind === undefined
+      ? readingKind(role, readingUnit === 'V', statistics[reading])
+      : { kind: decidedKind, by: 'header' as const };
+  const { meaning, guessed: meaningGuessed } =
+    askedMeaning === undefined ? meaningOf(columns, volume, reading) : { meaning: askedMeaning, guessed: false };
+  const temperature = columnBeside(columns, 'temperature', volume);
+  const time = columnBeside(columns, 'time', volume);
   const inVolts = kind === 'mV' && staysWithinVolts(columns, reading) && readingUnit === undefined;
   const group: ColumnGroup = {
     volume,
@@ -46,6 +60,14 @@ export function toColumnGroup(
     readingKind: kind,
     volumeUnit: volumeUnit === 'µL' || volumeUnit === 'L' ? volumeUnit : 'mL',
     potentialUnit: kind === 'mV' && (readingUnit === 'V' || inVolts) ? 'V' : 'mV',
+    volumeUnitGiven: volumeUnit !== undefined,
+    readingUnitGiven: readingUnit !== undefined,
+    volumeUnitDecided: headers[volume].unitDecided === true,
+    readingUnitDecided: headers[reading].unitDecided === true,
+    volumeMeaning: meaning,
+    meaningGuessed,
+    ...(temperature === undefined ? {} : { temperature, ...unitOf(headers[temperature].unit, 'temperatureUnit') }),
+    ...(time === undefined ? {} : { time, ...unitOf(headers[time].unit, 'timeUnit') }),
     ...(sample === undefined || sample === volume || sample === reading ? {} : { sample }),
   };
   const named = (column: number): string => {
@@ -65,6 +87,7 @@ export function toColumnGroup(
       column: by === 'against-header' ? reading + 1 : volume + 1,
     });
   }
+  if (meaningGuessed) notices.push(meaningNotice(named(volume), meaning, volume + 1));
   const { maximum } = statistics[volume];
   if (volumeUnit === undefined && (maximum > LARGEST_USUAL_ML || (maximum > 0 && maximum < SMALLEST_USUAL_ML))) {
     notices.push({
@@ -85,6 +108,36 @@ export function toColumnGroup(
     });
   }
   return { group, notices };
+}
+
+const MEANINGS: Readonly<Record<VolumeMeaning, string>> = {
+  cumulative: 'for the volume added so far, because its figures rise all along',
+  increments: 'for single additions, because its figures do not go on rising while the readings go one way',
+  burette: 'for the scale of a burette that did not start at zero: the first figure was subtracted',
+  countingDown: 'for a burette that counts down: what it shows was subtracted from the first figure',
+};
+
+function meaningNotice(column: string, meaning: VolumeMeaning, number: number): ColumnNotice {
+  return {
+    code: 'volume-meaning-guessed',
+    seen: `${capital(column)} was taken ${MEANINGS[meaning]}.`,
+    means: 'If its figures mean something else, every volume is wrong.',
+    remedy:
+      'Compare with the record; a header such as "V added (mL)", "increment (mL)" or "burette reading (mL)" settles it.',
+    column: number,
+  };
+}
+
+/** A person who says that a column holds additions, or sums, is believed. */
+function meaningOf({ headers, section }: SectionColumns, volume: number, reading: number) {
+  const { role, roleDecided } = headers[volume];
+  if (roleDecided && role === 'increment') return { meaning: 'increments' as const, guessed: false };
+  const name = plainWords(section.names[volume]);
+  return volumeMeaning(section.values[volume], section.values[reading], name, role === 'increment');
+}
+
+function unitOf<Key extends string>(unit: ExportUnit | undefined, key: Key): { readonly [K in Key]?: ExportUnit } {
+  return unit === undefined ? {} : ({ [key]: unit } as { [K in Key]?: ExportUnit });
 }
 
 function staysWithinVolts({ statistics }: SectionColumns, column: number): boolean {

@@ -9,6 +9,8 @@ export interface DecodedText {
   /** The text without byte order mark; every line ends with a line feed, whatever the file used. */
   readonly text: string;
   readonly encoding: TextEncodingName;
+  /** Whether neither a byte order mark nor valid UTF-8 decided, but the look of the bytes. */
+  readonly guessed: boolean;
 }
 
 /**
@@ -26,11 +28,11 @@ const WINDOWS_1252_C1 = '€\u0081‚ƒ„…†‡ˆ‰Š‹Œ\u008dŽ\u008f\u0
 /**
  * Bytes to text: UTF-8 with or without byte order mark, UTF-16 with one or by
  * the pattern of its NUL bytes, else Windows-1252, in which every byte stands
- * for something.
+ * for something. `asked` is the encoding where a person has decided.
  *
  * Refuses with 'file-too-large', 'file-empty' or 'file-not-text'.
  */
-export function decodeText(bytes: Uint8Array): Outcome<DecodedText> {
+export function decodeText(bytes: Uint8Array, asked?: TextEncodingName): Outcome<DecodedText> {
   if (bytes.length > maximumFileBytes) {
     return refuse(
       'file-too-large',
@@ -38,7 +40,7 @@ export function decodeText(bytes: Uint8Array): Outcome<DecodedText> {
       'Export the titration alone, or a part of it, to a file of its own.',
     );
   }
-  const { encoding, raw } = decodeByEvidence(bytes);
+  const { encoding, raw } = asked === undefined ? decodeByEvidence(bytes) : decodeAs(bytes, asked);
   // The decoder drops a byte order mark itself; files glued together carry further ones inside.
   const text = normaliseLineEnds(raw.includes('\ufeff') ? raw.replaceAll('\ufeff', '') : raw);
   if (!/\S/.test(text)) {
@@ -52,23 +54,30 @@ export function decodeText(bytes: Uint8Array): Outcome<DecodedText> {
       foreign?.remedy ?? 'Export the titration as text, with volumes and readings in columns.',
     );
   }
-  return { ok: true, value: { text, encoding } };
+  const marked = bytes[0] === 0xff || bytes[0] === 0xfe;
+  return { ok: true, value: { text, encoding, guessed: asked === undefined && encoding !== 'UTF-8' && !marked } };
 }
 
 function refuse(code: RefusalCode, message: string, remedy: string): Outcome<never> {
   return { ok: false, refusals: [{ code, message, remedy, place: {} }] };
 }
 
+function decodeAs(
+  bytes: Uint8Array,
+  encoding: TextEncodingName,
+): { readonly encoding: TextEncodingName; readonly raw: string } {
+  if (encoding !== 'Windows-1252') return { encoding, raw: new TextDecoder(encoding.toLowerCase()).decode(bytes) };
+  const latin = new TextDecoder('windows-1252').decode(bytes);
+  const raw = latin.replace(/[\u0080-\u009f]/g, (character) => WINDOWS_1252_C1[character.charCodeAt(0) - 0x80]);
+  return { encoding, raw };
+}
+
 function decodeByEvidence(bytes: Uint8Array): { readonly encoding: TextEncodingName; readonly raw: string } {
   const wide = utf16Of(bytes);
-  if (wide !== undefined) return { encoding: wide, raw: new TextDecoder(wide.toLowerCase()).decode(bytes) };
+  if (wide !== undefined) return decodeAs(bytes, wide);
   const raw = asUtf8(bytes);
   if (raw !== undefined) return { encoding: 'UTF-8', raw };
-  const latin = new TextDecoder('windows-1252').decode(bytes);
-  return {
-    encoding: 'Windows-1252',
-    raw: latin.replace(/[\u0080-\u009f]/g, (character) => WINDOWS_1252_C1[character.charCodeAt(0) - 0x80]),
-  };
+  return decodeAs(bytes, 'Windows-1252');
 }
 
 function utf16Of(bytes: Uint8Array): 'UTF-16LE' | 'UTF-16BE' | undefined {

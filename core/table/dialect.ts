@@ -7,6 +7,7 @@ import { parseNumber } from './parseNumber.ts';
 import { quoteCell } from './quoteCell.ts';
 import { type MarksScore, scoreMarks } from './scoreMarks.ts';
 import { type Delimiter, splitCells } from './splitCells.ts';
+import type { TableOverrules } from './tableOverrules.ts';
 
 /** How a file writes its table: what parts cells, and how numbers are written. */
 export interface Dialect {
@@ -41,20 +42,25 @@ const DELIMITERS: readonly Delimiter[] = ['\t', ';', '|', ',', 'spaces'];
  *
  * Refuses with 'table-no-columns' where no combination gives a line with two
  * numbers, and with 'table-delimiter-unclear' where commas part cells and
- * decimals alike.
+ * decimals alike. What `asked` decides is not tried otherwise.
  */
-export function chooseDialect(lines: readonly string[], fileName: string): Outcome<DialectChoice> {
+export function chooseDialect(
+  lines: readonly string[],
+  fileName: string,
+  asked: TableOverrules = {},
+): Outcome<DialectChoice> {
   const numbered = selectLines(lines);
   const sample = numbered.map((index) => lines[index]);
-  const candidates = candidatesFor(sample).sort((a, b) => b.score - a.score || assumes(a) - assumes(b));
+  const candidates = candidatesFor(sample, asked).sort((a, b) => b.score - a.score || assumes(a) - assumes(b));
   const best = candidates[0];
-  if (best === undefined || best.score <= 0) return { ok: false, refusals: [noColumns(lines, fileName)] };
+  if (best === undefined || best.score <= 0) return { ok: false, refusals: [noColumns(lines, fileName, asked)] };
   const firstLine = numbered[best.dataLines[0]] + 1;
   const dialect: Dialect = { delimiter: best.delimiter, marks: best.marks };
 
   const dataLines = best.dataLines.map((at) => sample[at]);
   const dataCells = best.dataLines.map((at) => best.cells[at]);
-  if (best.delimiter === ',' && best.marks.decimal === '.' && commasAreBoth(dataLines, dataCells)) {
+  const settled = asked.delimiter !== undefined && asked.decimal !== undefined;
+  if (!settled && best.delimiter === ',' && best.marks.decimal === '.' && commasAreBoth(dataLines, dataCells)) {
     const message = `Commas seem to part the cells and the decimals alike (line ${firstLine}: ${quoteCell(lines[firstLine - 1])}), so that the numbers cannot be told apart.`;
     const remedy = 'Export again with semicolons or tabs between the columns, or with decimal points.';
     return {
@@ -65,7 +71,7 @@ export function chooseDialect(lines: readonly string[], fileName: string): Outco
   const doubts: Doubt[] = [];
   const rival = rivalOf(best, candidates);
   if (rival !== undefined) doubts.push(marksDoubt(best, rival, numbered, fileName));
-  else if (couldBeOneColumn(best, sample, lines.slice(0, firstLine - 1)))
+  else if (asked.delimiter === undefined && couldBeOneColumn(best, sample, lines.slice(0, firstLine - 1)))
     doubts.push(oneColumnDoubt(lines[firstLine - 1], firstLine, fileName));
   return { ok: true, value: { dialect, doubts } };
 }
@@ -89,19 +95,21 @@ function selectLines(lines: readonly string[]): number[] {
   ];
 }
 
-function candidatesFor(sample: readonly string[]): Candidate[] {
+function candidatesFor(sample: readonly string[], asked: TableOverrules): Candidate[] {
   const text = sample.join('\n');
   const quoted = text.includes('"');
   const candidates: Candidate[] = [];
-  for (const delimiter of DELIMITERS) {
+  for (const delimiter of asked.delimiter === undefined ? DELIMITERS : [asked.delimiter]) {
     if (!text.includes(delimiter === 'spaces' ? ' ' : delimiter)) continue;
     const cells = splitCells(sample, delimiter);
-    for (const decimal of ['.', ','] as const) {
+    for (const decimal of asked.decimal === undefined ? (['.', ','] as const) : [asked.decimal]) {
       // A comma between unquoted figures cannot both part cells and stand before decimals.
-      if (decimal === ',' && delimiter === ',' && !quoted) continue;
-      for (const thousands of thousandsFor(text, delimiter, decimal)) {
+      if (decimal === ',' && delimiter === ',' && !quoted && asked.delimiter === undefined) continue;
+      const tried = asked.thousands === undefined ? thousandsFor(text, delimiter, decimal) : [asked.thousands];
+      for (const thousands of tried) {
+        if (thousands === decimal) continue;
         // Without any comma there is nothing to try but points that part thousands.
-        if (decimal === ',' && thousands !== '.' && !text.includes(',')) continue;
+        if (asked.decimal === undefined && decimal === ',' && thousands !== '.' && !text.includes(',')) continue;
         const marks: NumberMarks = { decimal, thousands };
         candidates.push({ delimiter, marks, cells, ...scoreMarks(cells, marks) });
       }
@@ -156,13 +164,16 @@ function couldBeOneColumn(best: Candidate, sample: readonly string[], above: rea
   return best.dataLines.every((line) => /^\s*[-+]?\d+,\d{3}\s*$/.test(sample[line]));
 }
 
-function noColumns(lines: readonly string[], fileName: string) {
+function noColumns(lines: readonly string[], fileName: string, asked: TableOverrules) {
   const filled = lines.filter((line) => line.trim() !== '');
   const first = lines.findIndex((line) => line.trim() !== '') + 1;
   return {
     code: 'table-no-columns' as const,
     message: `No line of the file holds two numbers: ${filled.length} ${filled.length === 1 ? 'line' : 'lines'} of text, beginning with ${quoteCell(filled[0] ?? '')}.`,
-    remedy: 'Export the titration with the volume and the reading (pH or mV) of each point side by side on one line.',
+    remedy:
+      Object.keys(asked).length > 0
+        ? 'Take back what was chosen for encoding, delimiter or decimal mark, or choose otherwise.'
+        : 'Export the titration with the volume and the reading (pH or mV) of each point side by side on one line.',
     place: { file: fileName, line: Math.max(1, first) },
   };
 }

@@ -77,7 +77,7 @@ export function findHeader(
 }
 
 /** Without a header only rows that touch the table and hold no text belong to it. */
-function leadingRows(facts: LineFacts, above: readonly number[]): number[] {
+export function leadingRows(facts: LineFacts, above: readonly number[]): number[] {
   const rows: number[] = [];
   for (let at = above.length - 1; at >= 0; at--) {
     const line = above[at];
@@ -87,12 +87,15 @@ function leadingRows(facts: LineFacts, above: readonly number[]): number[] {
   return rows.reverse();
 }
 
-function isUnitsRow(cells: readonly string[]): boolean {
+export function isUnitsRow(cells: readonly string[]): boolean {
   const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
   const units = filled.map(readUnit);
   // "V" and "pH" alone are the names of columns.
   if (!units.some((unit) => unit !== undefined && unit !== 'V' && unit !== 'pH')) return false;
-  return filled.every((cell, at) => units[at] !== undefined || isMissingMark(cell) || /^[[(]\W*1?[\])]$/.test(cell));
+  return filled.every(
+    (cell, at) =>
+      units[at] !== undefined || isMissingMark(cell) || /^\W?K\W?$/.test(cell) || /^[[(]\W*1?[\])]$/.test(cell),
+  );
 }
 
 /** The cells of a line as column names, if it can be a header of `width` columns. */
@@ -148,7 +151,7 @@ function captionsAbove(
   return filled >= 2 && filled < width && facts.widths[line] <= width && facts.widths[line] > filled ? line : undefined;
 }
 
-function spread(cells: readonly string[]): string[] {
+export function spread(cells: readonly string[]): string[] {
   let last = '';
   return cells.map((cell) => {
     last = cell.trim() === '' ? last : cell.trim();

@@ -1,4 +1,5 @@
 import { findHeader, type HeaderFound } from './findHeader.ts';
+import { givenHeader } from './givenHeader.ts';
 import type { LineFacts } from './lineFacts.ts';
 import type { Delimiter } from './splitCells.ts';
 
@@ -23,20 +24,31 @@ const REAL_ROWS = 5;
  * Finds the tables of a file in one pass. A line with two numbers is a full
  * row; lines between full rows that hold a number, or marks for "no value"
  * only, are rows with something missing; a header begins a new table; all
- * other lines are text.
+ * other lines are text. `headerLines` (indices, in order) are what a person
+ * has declared the header of the first table to be.
  */
-export function findSections(lines: readonly string[], facts: LineFacts, delimiter: Delimiter): SectionFound[] {
+export function findSections(
+  lines: readonly string[],
+  facts: LineFacts,
+  delimiter: Delimiter,
+  headerLines?: readonly number[],
+): SectionFound[] {
   const sections: OpenSection[] = [];
   let current: OpenSection | undefined;
   let pending: number[] = [];
-  for (let line = 0; line < lines.length; line++) {
+  // What stands above a header, or is one, is no row.
+  const firstRow = headerLines === undefined || headerLines.length === 0 ? 0 : headerLines[headerLines.length - 1] + 1;
+  for (let line = firstRow; line < lines.length; line++) {
     if (!isFullRow(facts, line, delimiter)) {
       pending.push(line);
       continue;
     }
     let header: HeaderFound | undefined;
     if (current === undefined || pending.length > 0) {
-      const found = findHeader(lines, facts, pending, facts.widths[line], delimiter);
+      const found =
+        current === undefined && headerLines !== undefined
+          ? givenHeader(facts, headerLines, pending)
+          : findHeader(lines, facts, pending, facts.widths[line], delimiter);
       if (current === undefined || beginsAnew(current, found, facts, pending, line)) header = found;
     }
     if (header !== undefined) {

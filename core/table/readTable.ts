@@ -8,6 +8,7 @@ import { type LineFacts, lineFacts } from './lineFacts.ts';
 import { longestRow } from './longestRow.ts';
 import { splitCells } from './splitCells.ts';
 import type { Table, TableSection, TextLine } from './table.ts';
+import type { TableOverrules } from './tableOverrules.ts';
 
 /** Longer lines are cut where they are kept as text: nobody reads on, and pages slow down over them. */
 const LONGEST_TEXT = 1000;
@@ -16,21 +17,22 @@ const LONGEST_TEXT = 1000;
  * Bytes to tables: encoding, delimiter and number marks from the whole file,
  * then the tables in it with their headers, and every other line as text.
  *
- * Refuses with the codes of `decodeText` and `chooseDialect`.
+ * What a person has decided in `overrules` is taken as it is. Refuses with the
+ * codes of `decodeText` and `chooseDialect`.
  */
-export function readTable(bytes: Uint8Array, fileName: string): Outcome<Table> {
-  const decoded = decodeText(bytes);
+export function readTable(bytes: Uint8Array, fileName: string, overrules: TableOverrules = {}): Outcome<Table> {
+  const decoded = decodeText(bytes, overrules.encoding);
   if (!decoded.ok) return { ok: false, refusals: decoded.refusals.map((refusal) => inFile(refusal, fileName)) };
   const lines = decoded.value.text.split('\n');
   // The end of the last line is not one line more.
   if (lines[lines.length - 1] === '') lines.pop();
 
-  const choice = chooseDialect(lines, fileName);
+  const choice = chooseDialect(lines, fileName, overrules);
   if (!choice.ok) return choice;
   const { dialect, doubts } = choice.value;
   const short = lines.map((line) => (line.length > longestRow ? '' : line));
   const facts = lineFacts(lines, splitCells(short, dialect.delimiter), dialect);
-  const found = findSections(lines, facts, dialect.delimiter);
+  const found = findSections(lines, facts, dialect.delimiter, headerIndices(overrules.headerLines, lines.length));
   if (found.length === 0) {
     const message = 'The file holds text with figures in it, but no rows of numbers.';
     const remedy = 'Export the volume and the reading (pH or mV) of each point side by side on one line.';
@@ -43,6 +45,7 @@ export function readTable(bytes: Uint8Array, fileName: string): Outcome<Table> {
     value: {
       file: fileName,
       encoding: decoded.value.encoding,
+      encodingGuessed: decoded.value.guessed,
       dialect,
       lineCount: lines.length,
       preamble: text.filter(({ line }) => line < firstLine),
@@ -51,6 +54,13 @@ export function readTable(bytes: Uint8Array, fileName: string): Outcome<Table> {
       doubts,
     },
   };
+}
+
+function headerIndices(headerLines: readonly number[] | undefined, lineCount: number): number[] | undefined {
+  return headerLines
+    ?.map((line) => line - 1)
+    .filter((line) => Number.isInteger(line) && line >= 0 && line < lineCount)
+    .sort((a, b) => a - b);
 }
 
 function inFile(refusal: Refusal, fileName: string): Refusal {
@@ -64,6 +74,7 @@ function toSection({ header, rows, width }: SectionFound, facts: LineFacts): Tab
     width,
     ...(header.headerLine === undefined ? {} : { headerLine: header.headerLine + 1 }),
     headerLines: headerLinesOf(header).map((line) => line + 1),
+    headerCells: headerLinesOf(header).map((line) => facts.cells[line]),
     names: fill(header.names),
     units: fill(header.units),
     captions: fill(header.captions),

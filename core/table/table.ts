@@ -29,6 +29,8 @@ export interface TableSection {
   readonly headerLine?: number;
   /** All lines taken up by captions, header and units row, in order. */
   readonly headerLines: readonly number[];
+  /** Their cells as written, in the same order. */
+  readonly headerCells: readonly (readonly string[])[];
   /** Header of each column, '' where there is none. */
   readonly names: readonly string[];
   /** Unit of each column from a row under the header, as written; '' where there is none. */
@@ -44,6 +46,8 @@ export interface TableSection {
 export interface Table {
   readonly file: string;
   readonly encoding: TextEncodingName;
+  /** Whether the encoding was told by the look of the bytes alone. */
+  readonly encodingGuessed: boolean;
   readonly dialect: Dialect;
   readonly lineCount: number;
   /** Text lines above the first table. */

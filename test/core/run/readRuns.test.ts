@@ -1,6 +1,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
+import { readExport } from '../../../core/run/readExport.ts';
 import { readRuns } from '../../../core/run/readRuns.ts';
 import type { Run } from '../../../core/run/run.ts';
 import { readTable } from '../../../core/table/readTable.ts';
@@ -34,7 +35,7 @@ describe('readRuns', () => {
     expect(files.length).toBeGreaterThanOrEqual(40);
   });
 
-  it.each(Object.entries(expected))('reads %s', (name, { runs, refused, encoding, delimiter, marks }) => {
+  it.each(Object.entries(expected))('reads %s', (name, { runs, refused, encoding, delimiter, marks, suggestions }) => {
     const outcome = readRuns(bytesOf(name), name);
     if (refused !== undefined || runs === undefined) {
       expect(outcome.ok ? [] : outcome.refusals.map(({ code }) => code)).toEqual(refused);
@@ -46,8 +47,27 @@ describe('readRuns', () => {
     }
     if (!outcome.ok) throw new Error(outcome.refusals[0].message);
     expect(outcome.value.map((run) => summary(run, name))).toEqual(
-      runs.map((run) => ({ label: '', excluded: [], notAccepted: [], doubts: [], ...run })),
+      runs.map(({ proposals, temperatures_C, times_s, ...run }) => ({
+        ...{ label: '', excluded: [], notAccepted: [], doubts: [] },
+        ...run,
+      })),
     );
+    runs.forEach(({ proposals, temperatures_C, times_s }, index) => {
+      const run = outcome.value[index];
+      if (proposals !== undefined) {
+        expect(run.proposals?.map(({ code, lines }) => [code, ...lines])).toEqual(proposals);
+      }
+      if (temperatures_C !== undefined) expect(run.rows.map((row) => row.temperature_C)).toEqual(temperatures_C);
+      if (times_s !== undefined) expect(run.rows.map((row) => row.time_s)).toEqual(times_s);
+    });
+    const whole = readExport(bytesOf(name), name);
+    if (!whole.ok) throw new Error(whole.refusals[0].message);
+    expect(whole.value.runs).toEqual(outcome.value);
+    if (suggestions !== undefined) {
+      expect(whole.value.suggestions.map(({ key, value, unit, line }) => [key, value, unit, line])).toEqual(
+        suggestions,
+      );
+    }
     const table = readTable(bytesOf(name), name);
     if (!table.ok) throw new Error(table.refusals[0].message);
     expect(table.value).toMatchObject({

@@ -23,8 +23,12 @@ describe('decodeText', () => {
     ['UTF-16BE', utf16('\ufeffV (µL);pH\n1;2\n', true)],
     ['UTF-16BE', utf16('V (µL);pH\n1;2\n', true)],
     ['Windows-1252', Uint8Array.from('V (µL);pH\n1;2\n', (character) => character.charCodeAt(0))],
-  ])('reads %s', (encoding, bytes) => {
-    expect(decodeText(bytes)).toEqual({ ok: true, value: { text: 'V (µL);pH\n1;2\n', encoding } });
+  ] as const)('reads %s', (encoding, bytes) => {
+    expect(decodeText(bytes)).toMatchObject({ ok: true, value: { text: 'V (µL);pH\n1;2\n', encoding } });
+    expect(decodeText(bytes, encoding)).toEqual({
+      ok: true,
+      value: { text: 'V (µL);pH\n1;2\n', encoding, guessed: false },
+    });
   });
 
   it('reads the dashes and quotes of Windows-1252, which some runtimes leave as control characters', () => {

@@ -1,6 +1,8 @@
 import type { DoubtCode } from '../../../core/notice/doubt.ts';
 import type { RefusalCode } from '../../../core/notice/refusal.ts';
+import type { ProposalCode } from '../../../core/run/rowProposal.ts';
 import type { ReadingKind } from '../../../core/run/run.ts';
+import type { SuggestedKey } from '../../../core/run/setUpSuggestions.ts';
 import type { TextEncodingName } from '../../../core/table/decodeText.ts';
 import type { NumberMarks } from '../../../core/table/numberMarks.ts';
 import type { Delimiter } from '../../../core/table/splitCells.ts';
@@ -24,6 +26,10 @@ export interface ExpectedRun {
   readonly excluded?: readonly number[];
   readonly notAccepted?: readonly (readonly [line: number, column: number | undefined, code: RefusalCode])[];
   readonly doubts?: readonly DoubtCode[];
+  /** Left out where what is proposed is not what the file is there for. */
+  readonly proposals?: readonly (readonly [code: ProposalCode, ...lines: readonly number[]])[];
+  readonly temperatures_C?: readonly number[];
+  readonly times_s?: readonly number[];
 }
 
 export interface ExpectedExport {
@@ -31,6 +37,7 @@ export interface ExpectedExport {
   readonly delimiter?: Delimiter;
   readonly marks?: NumberMarks;
   readonly runs?: readonly ExpectedRun[];
+  readonly suggestions?: readonly (readonly [key: SuggestedKey, value: number, unit: string | null, line: number])[];
   /** Codes of the refusals where no run can be formed. */
   readonly refused?: readonly RefusalCode[];
 }
@@ -47,6 +54,8 @@ const point: NumberMarks = { decimal: '.', thousands: '' };
 const comma: NumberMarks = { decimal: ',', thousands: '' };
 const pH = (firstLine: number, points = acid): ExpectedRun => ({ kind: 'pH', points, firstLine });
 const mV = (firstLine: number, points = potentials): ExpectedRun => ({ kind: 'mV', points, firstLine });
+const replaced = (at: number, volume: number): Points =>
+  acid.map((point, index) => (index === at ? [volume, point[1]] : point));
 const without = (points: Points, ...indices: number[]): Points => points.filter((_, at) => !indices.includes(at));
 
 /** By file name. */
@@ -261,4 +270,140 @@ export const expected: Readonly<Record<string, ExpectedExport>> = {
   'words-italian.csv': { runs: [pH(2)] },
   'words-portuguese.csv': { delimiter: '\t', runs: [mV(2)] },
   'words-dutch.csv': { runs: [{ ...pH(2), doubts: ['column-guessed'] }] },
+  'increments-in-header.csv': { runs: [{ ...pH(2), proposals: [] }] },
+  'increments-only-by-figures.csv': { runs: [{ ...pH(2), doubts: ['volume-meaning-guessed'] }] },
+  'increment-missing.csv': {
+    runs: [
+      {
+        ...pH(
+          2,
+          without(acid, 3).map(([volume, reading]) => [volume > 6 ? volume - 2 : volume, reading]),
+        ),
+        notAccepted: [[5, 1, 'cell-missing']],
+        doubts: ['dose-missing', 'rows-not-accepted'],
+      },
+    ],
+  },
+  'burette-reading-above-zero.csv': { runs: [{ ...pH(2), proposals: [] }] },
+  'burette-reading-french-above-zero.csv': { runs: [pH(2)] },
+  'start-above-zero-only-by-figures.csv': {
+    runs: [
+      {
+        ...pH(
+          2,
+          secondAcid.map(([, reading], at) => [1.5 * at, reading]),
+        ),
+        doubts: ['volume-meaning-guessed'],
+      },
+    ],
+  },
+  'burette-counts-down.csv': { runs: [{ ...pH(2), proposals: [] }] },
+  'counts-down-only-by-figures.csv': { runs: [{ ...pH(2), doubts: ['volume-meaning-guessed'] }] },
+  'slipped-digit.csv': {
+    runs: [{ ...pH(2, replaced(4, 80)), doubts: ['volume-steps-back'], proposals: [['volume-slipped', 6]] }],
+  },
+  'slipped-decimal-mark.csv': {
+    runs: [{ ...pH(2, replaced(3, 0.6)), doubts: ['volume-steps-back'], proposals: [['volume-slipped', 5]] }],
+  },
+  'stuck-sensor.csv': {
+    runs: [
+      {
+        ...pH(
+          2,
+          [3.1, 3.35, 3.6, 3.84, 4.1, 4.1, 4.1, 4.1, 4.1, 4.1, 5.6, 5.88, 6.2, 6.7].map((reading, at) => [at, reading]),
+        ),
+        proposals: [['sensor-stuck', 7, 8, 9, 10, 11]],
+      },
+    ],
+  },
+  'isolated-spike.csv': {
+    runs: [
+      { ...pH(2, along([2.94, 3.71, 7.77, 4.45, 4.97, 5.42, 8.61, 11.3, 11.72])), proposals: [['reading-spike', 4]] },
+    ],
+  },
+  'spike-in-millivolts.csv': {
+    runs: [
+      {
+        ...mV(2, along([312.5, 267.4, 245.1, -310, 193, 166.6, -21.9, -180.4, -205.2])),
+        proposals: [['reading-spike', 5]],
+      },
+    ],
+  },
+  'beyond-two-volts.csv': {
+    runs: [
+      {
+        ...mV(2, along([312.5, 267.4, 9999, 223.8, 193, 166.6, -21.9, -180.4, -205.2])),
+        excluded: [4],
+        doubts: ['reading-beyond-range'],
+        proposals: [['reading-beyond-range', 4]],
+      },
+    ],
+  },
+  'row-written-twice.csv': {
+    runs: [{ ...pH(2, [...acid.slice(0, 4), ...acid.slice(3)]), proposals: [['row-duplicated', 6]] }],
+  },
+  'several-readings-at-one-volume.csv': {
+    runs: [
+      {
+        ...pH(2, [...acid.slice(0, 3), [4, 4.11], acid[3], [6, 4.47], ...acid.slice(4)]),
+        proposals: [
+          ['volume-repeated', 4, 5],
+          ['volume-repeated', 6, 7],
+        ],
+      },
+    ],
+  },
+  'temperature-in-kelvin-and-minutes.csv': {
+    runs: [{ ...pH(2), temperatures_C: acid.map(() => 25), times_s: acid.map((_, at) => 30 * at) }],
+  },
+  'time-of-day.csv': { runs: [{ ...pH(2), times_s: acid.map((_, at) => 36030 + 60 * at) }] },
+  'microlitres-in-units-row.txt': { runs: [pH(3)] },
+  'set-up-above-german.csv': {
+    runs: [pH(7)],
+    suggestions: [
+      ['sample.volume_mL', 25, 'mL', 2],
+      ['titrant.concentration_M', 0.1002, 'mol/L', 3],
+      ['medium.temperature_C', 24.5, '°C', 4],
+    ],
+  },
+  'set-up-above-french.csv': {
+    runs: [pH(8)],
+    suggestions: [
+      ['sample.volume_mL', 20, 'mL', 2],
+      ['sample.extraWater_mL', 30, 'mL', 3],
+      ['titrant.concentration_M', 0.105, 'mol/L', 4],
+      ['medium.temperature_C', 22, '°C', 5],
+    ],
+  },
+  'set-up-in-cells-spanish.csv': {
+    runs: [pH(6)],
+    suggestions: [
+      ['sample.volume_mL', 10, 'mL', 1],
+      ['titrant.concentration_M', 0.0987, 'mM', 2],
+      ['medium.temperature_C', 24, 'K', 3],
+    ],
+  },
+  'set-up-in-one-line.txt': {
+    runs: [pH(4)],
+    suggestions: [
+      ['sample.volume_mL', 15, 'mL', 1],
+      ['titrant.concentration_M', 0.0512, 'M', 1],
+      ['medium.temperature_C', 21.5, '°C', 1],
+    ],
+  },
+  'control-characters-in-cells.csv': {
+    runs: [
+      {
+        ...pH(2, without(acid, 5, 6)),
+        notAccepted: [
+          [7, 2, 'cell-not-a-number'],
+          [8, 2, 'cell-not-a-number'],
+        ],
+        doubts: ['rows-not-accepted'],
+      },
+    ],
+  },
+  'very-long-line.csv': { runs: [pH(2)] },
+  'numbers-in-blocks-with-remark.csv': { runs: [pH(2)] },
+  'exponents-with-capital-and-comma.csv': { delimiter: ';', marks: comma, runs: [mV(2)] },
 };
