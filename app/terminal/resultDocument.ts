@@ -1,8 +1,5 @@
-import type { Doubt, Refusal, RunResult } from '../../core/index.ts';
+import { type Doubt, type Refusal, type RunResult, usualSeed } from '../../core/index.ts';
 import { software } from './software.ts';
-
-/** Seed of everything random; nothing that is printed by this command draws numbers yet, and it is stated all the same. */
-const seed = 1;
 
 /** The JSON document of a call: format "stepwell-result", version 1. Keys may be added; none changes its meaning. */
 export function resultDocument(results: readonly RunResult[], refusals: readonly Refusal[]) {
@@ -10,7 +7,8 @@ export function resultDocument(results: readonly RunResult[], refusals: readonly
     format: 'stepwell-result',
     version: 1,
     software,
-    seed,
+    // Nothing that is printed by this command draws numbers yet; the seed is stated all the same.
+    seed: usualSeed,
     runs: results.map(describeRun),
     refusals: [
       ...refusals.map(describeRefusal),

@@ -1,4 +1,5 @@
 import type { Progress, Run, SheetFile } from '../../core/index.ts';
+import { longestSilence } from './longestSilence.ts';
 import type { Reply, Request } from './messages.ts';
 
 /** The part of a Worker that is used here. */
@@ -9,8 +10,8 @@ export interface WorkerLike {
   onerror: ((event: { readonly message?: string }) => void) | null;
 }
 
-export type ReadReply = Exclude<Reply, { kind: 'progress' | 'analysed' }>;
-export type AnalysisReply = Exclude<Reply, { kind: 'progress' | 'read' }>;
+export type ReadReply = Exclude<Reply, { kind: 'progress' | 'analysed' | 'repeated' }>;
+export type AnalysisReply = Exclude<Reply, { kind: 'progress' | 'read' | 'repeated' }>;
 
 interface Job {
   readonly request: Request;
@@ -26,7 +27,7 @@ export interface Patience {
   readonly stop: number;
 }
 
-const usualPatience: Patience = { silence: 60_000, stop: 400 };
+const usualPatience: Patience = { silence: longestSilence, stop: 400 };
 
 /**
  * The page's side of the worker: one worker, started when first needed, ended and started anew where it stays silent.

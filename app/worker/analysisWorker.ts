@@ -1,6 +1,6 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex } from '@noble/hashes/utils.js';
-import { analyseRun, readRuns } from '../../core/index.ts';
+import { analyseRun, bootstrapRun, type Progress, readRuns } from '../../core/index.ts';
 import { driveGenerator } from './driveGenerator.ts';
 import type { Reply, Request } from './messages.ts';
 
@@ -49,11 +49,16 @@ async function answer(request: Exclude<Request, { kind: 'stop' }>): Promise<Repl
     const outcome = readRuns(request.bytes, request.name);
     return { kind: 'read', job, sha256: bytesToHex(sha256(request.bytes)), outcome };
   }
-  const ended = await driveGenerator(analyseRun(request.run, request.sheet), {
+  const hooks = {
     now: () => performance.now(),
     pause,
     isStopped: () => stopped.has(job),
-    report: (progress) => scope.postMessage({ kind: 'progress', job, progress }),
-  });
+    report: (progress: Progress) => scope.postMessage({ kind: 'progress', job, progress }),
+  };
+  if (request.kind === 'repeat') {
+    const ended = await driveGenerator(bootstrapRun(request.result, request.share), hooks);
+    return ended === null ? { kind: 'stopped', job } : { kind: 'repeated', job, repeated: ended.value };
+  }
+  const ended = await driveGenerator(analyseRun(request.run, request.sheet), hooks);
   return ended === null ? { kind: 'stopped', job } : { kind: 'analysed', job, outcome: ended.value };
 }

@@ -1,6 +1,7 @@
 import type { RunResult } from '../../../core/index.ts';
 import type { DeclaredField } from '../conditions/declaredFields.ts';
 import { usePointing } from '../page/pointing.ts';
+import { BootstrapCheck } from './bootstrap/BootstrapCheck.tsx';
 import { DoubtAtPlace } from './DoubtAtPlace.tsx';
 import { Ending } from './Ending.tsx';
 import { isExact } from './isExact.ts';
@@ -45,6 +46,7 @@ export function Results({ result, declared }: Props) {
           sources={resultSources(result)}
           pointed={pointed?.quantity ?? null}
         />
+        <BootstrapCheck result={result} />
       </div>
     </section>
   );
