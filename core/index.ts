@@ -15,15 +15,11 @@ export {
 export type { Progress } from './results/progress.ts';
 export type * from './results/runResult.ts';
 export { usualSeed } from './results/usualSeed.ts';
-export { applyRowDecisions, type DecisionsByLine } from './run/applyRowDecisions.ts';
-export type { ChoiceSource, ChoicesMade, ColumnMade, Made } from './run/choicesMade.ts';
+export { applyRowDecisions } from './run/applyRowDecisions.ts';
 export { type ReadExport, readExport } from './run/readExport.ts';
 export type * from './run/readingChoices.ts';
 export { readRuns } from './run/readRuns.ts';
-export type { ProposalCode, RowProposal } from './run/rowProposal.ts';
 export type { RowDecision, Run } from './run/run.ts';
-export type { SetUpSuggestion, SuggestedKey } from './run/setUpSuggestions.ts';
-export type { RowCounts, RowInRun, RowStatus, TableView, ViewLine } from './run/tableView.ts';
 export { completeSheet } from './sheet/completeSheet.ts';
 export type { Declaration } from './sheet/declaration.ts';
 export { parseSheet } from './sheet/parseSheet.ts';

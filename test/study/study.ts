@@ -1,4 +1,5 @@
 import { countLadders } from '../core/inference/ladderStudy.ts';
+import { accountingStudy } from './accountingStudy.ts';
 import { boundErrors } from './boundErrors.ts';
 import { coverageOf } from './coverageStudy.ts';
 import { studyDesigns } from './studyDesigns.ts';
@@ -11,6 +12,8 @@ const fewestBounds = 10;
 const comparedBounds = 40;
 /** Ladders climbed with either kind of noise. */
 const ladderRuns = 400;
+/** Damaged files that are read; the second argument "reading" asks for them alone. */
+const damagedFiles = 200_000;
 
 const runs = Number(process.argv[2] ?? usualRuns);
 const only = process.argv[3];
@@ -43,3 +46,11 @@ if (only === undefined)
       `ladder, noise ${noise}: right ${share(right)} % (at least 95), too many ${share(tooMany)} % (at most 2), too few ${share(tooFew)} %, of ${ladderRuns}; curves ${meanEvaluations.toFixed(0)} in the mean, ${mostEvaluations} at most`,
     );
   }
+
+if (only === undefined || only === 'reading') {
+  const started = performance.now();
+  const { read, longest_ms } = accountingStudy(damagedFiles, firstSeed);
+  console.log(
+    `reading: every row of ${damagedFiles} damaged files accounted for, ${read} of them with runs; ${((performance.now() - started) / 1000).toFixed(0)} s, one file at most ${longest_ms.toFixed(0)} ms`,
+  );
+}
