@@ -21,7 +21,6 @@ export interface CollectedRows {
 }
 
 const USED: RowDecision = { use: 'used' };
-const NOTHING = {};
 
 /** Largest volume that any titration doses, mL; beyond it a number would overflow later sums. */
 const LARGEST_VOLUME_ML = 1e5;
@@ -63,35 +62,33 @@ export function collectRows(
       notAccepted.push(cellRefusal(columns, group, source, !Number.isFinite(volume_mL), file));
       return;
     }
-    const decision = decide(volume_mL, reading, group);
-    rows.push({ line: source.line, volume_mL, reading, ...besides(columns, group, index), decision });
+    const row: Writable<RunRow> = {
+      line: source.line,
+      volume_mL,
+      reading,
+      decision: decide(volume_mL, reading, group),
+    };
+    addBesides(row, columns, group, index);
+    rows.push(row);
   });
   const doubts = firstGap < 0 ? [] : [doseMissing(section.rows[indices[firstGap]].line, file)];
   return { rows, notAccepted, doubts };
 }
 
+type Writable<Value> = { -readonly [Key in keyof Value]: Value[Key] };
+
 /** Temperature and time of a row, as far as the file gives them. */
-function besides(
-  { section }: SectionColumns,
-  group: ColumnGroup,
-  index: number,
-): { temperature_C?: number; time_s?: number } {
-  if (group.temperature === undefined && group.time === undefined) return NOTHING;
-  const found: { temperature_C?: number; time_s?: number } = {};
+function addBesides(row: Writable<RunRow>, { section }: SectionColumns, group: ColumnGroup, index: number): void {
   if (group.temperature !== undefined) {
     const value = section.values[group.temperature][index];
     const temperature = group.temperatureUnit === 'K' ? value - 273.15 : value;
-    if (Number.isFinite(temperature)) found.temperature_C = temperature;
+    if (Number.isFinite(temperature)) row.temperature_C = temperature;
   }
   if (group.time !== undefined) {
-    const time = readTime(
-      section.values[group.time][index],
-      section.rows[index].cells[group.time] ?? '',
-      group.timeUnit,
-    );
-    if (time !== undefined) found.time_s = time;
+    const { cells } = section.rows[index];
+    const time = readTime(section.values[group.time][index], cells[group.time] ?? '', group.timeUnit);
+    if (time !== undefined) row.time_s = time;
   }
-  return found;
 }
 
 function doseMissing(line: number, file: string): Doubt {

@@ -67,15 +67,18 @@ function spikes(rows: readonly RunRow[], kind: ReadingKind): RowProposal[] {
   const proposals: RowProposal[] = [];
   for (let at = 2; at + 2 < rows.length; at++) {
     const y = rows[at].reading;
-    const near = [rows[at - 2].reading, rows[at - 1].reading, rows[at + 1].reading, rows[at + 2].reading];
-    const out = Math.max(Math.min(...near) - y, y - Math.max(...near));
+    const before = rows[at - 1].reading;
+    const after = rows[at + 1].reading;
+    const lowest = Math.min(rows[at - 2].reading, before, after, rows[at + 2].reading);
+    const highest = Math.max(rows[at - 2].reading, before, after, rows[at + 2].reading);
+    const out = Math.max(lowest - y, y - highest);
     if (out < SPIKE[kind] || out < TIMES_THE_NOISE * noise) continue;
-    if (Math.abs(near[2] - near[1]) > NEIGHBOURS_AGREE * out) continue;
+    if (Math.abs(after - before) > NEIGHBOURS_AGREE * out) continue;
     proposals.push({
       code: 'reading-spike',
       lines: [rows[at].line],
       action: 'exclude',
-      why: `the reading ${y} stands alone between ${near[1]} and ${near[2]}`,
+      why: `the reading ${y} stands alone between ${before} and ${after}`,
     });
   }
   return proposals;

@@ -4,6 +4,10 @@ import type { RunRow } from './run.ts';
 
 /** Rows that say the same twice, and several readings at one volume. `rows` in the order of the file. */
 export function proposeRepeats(rows: readonly RunRow[]): readonly RowProposal[] {
+  // Nearly always the volumes rise, and nothing is there twice.
+  let rises = true;
+  for (let at = 1; at < rows.length && rises; at++) rises = rows[at].volume_mL > rows[at - 1].volume_mL;
+  if (rises) return [];
   const byVolume = new Map<number, RunRow[]>();
   for (const row of rows) {
     const same = byVolume.get(row.volume_mL);

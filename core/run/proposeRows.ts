@@ -13,7 +13,7 @@ export function proposeRows(rows: readonly RunRow[], kind: ReadingKind): readonl
   const usable = rows.filter(({ decision }) => decision.use === 'used');
   const byVolume = proposeVolumes(usable);
   const slipped = new Set(byVolume.flatMap(({ code, lines }) => (code === 'volume-slipped' ? lines : [])));
-  const inSequence = usable.filter(({ line }) => !slipped.has(line));
+  const inSequence = slipped.size === 0 ? usable : usable.filter(({ line }) => !slipped.has(line));
   const all = [...beyondRange(rows), ...byVolume, ...proposeRepeats(inSequence), ...proposeReadings(inSequence, kind)];
   return gathered(all);
 }

@@ -9,11 +9,15 @@ const FAR_OUT_AT_END = 5;
 
 /** Volumes that leave the sequence of their neighbours. `rows` in the order of the file. */
 export function proposeVolumes(rows: readonly RunRow[]): readonly RowProposal[] {
-  const volumes = Float64Array.from(rows, ({ volume_mL }) => volume_mL);
+  const volumes = new Float64Array(rows.length);
+  for (let at = 0; at < volumes.length; at++) volumes[at] = rows[at].volume_mL;
   const sign = direction(volumes);
   const slips = new Set<number>();
   const proposals: RowProposal[] = [];
   for (let at = 0; at < rows.length; at++) {
+    // Between its neighbours a volume is where it belongs.
+    const inside = at > 0 && at + 1 < rows.length && sign * (volumes[at] - volumes[at - 1]) >= 0;
+    if (inside && sign * (volumes[at + 1] - volumes[at]) >= 0) continue;
     const between = slipAt(volumes, at, sign);
     if (between === undefined) continue;
     slips.add(at);
