@@ -5,7 +5,7 @@ import type { Quantity } from '../model/quantity.ts';
 import { studentQuantile } from '../numerics/studentQuantile.ts';
 import { coverage } from './coverage.ts';
 import { NoiseUncertainty } from './noiseUncertainty.ts';
-import { type FrozenMinimum, type ProfileInterval, profileInterval } from './profileInterval.ts';
+import { type FrozenMinimum, type ProfilePoint, profileInterval } from './profileInterval.ts';
 
 /** How far beyond the readings a constant still means something, in pH. */
 const constantMargin = 8;
@@ -21,8 +21,8 @@ export interface QuantityInterval {
   readonly degreesOfFreedom: number;
   /** 95 % interval; either end null where the profile never closes. */
   readonly interval: readonly [number | null, number | null];
-  /** Null for a quantity that follows from several parameters. */
-  readonly profile: ProfileInterval | null;
+  /** The profile in values of the quantity, rising; empty for a quantity that follows from several parameters. */
+  readonly points: readonly ProfilePoint[];
 }
 
 /** Intervals of all quantities of one run that the fit moves, in the order of its quantities; null for constants. */
@@ -57,7 +57,7 @@ export function intervalsOf(fit: ProblemFit, index: number, pHRange: readonly [n
       const half = u === null ? null : factor * u;
       const interval: [number | null, number | null] =
         half === null ? [null, null] : [values[q] - half, values[q] + half];
-      return { u, degreesOfFreedom, interval, profile: null };
+      return { u, degreesOfFreedom, interval, points: [] };
     }
     const sensitivity = binding.kind === 'known' ? binding.terms[0].sensitivity : 1;
     const nominal = binding.kind === 'known' ? binding.nominal : 0;
@@ -66,8 +66,15 @@ export function intervalsOf(fit: ProblemFit, index: number, pHRange: readonly [n
       binding.kind === 'known' ? ([-knowledgeRange, knowledgeRange] as const) : rangeOf(quantity, values[q], pHRange);
     const profile = profileInterval(minimum, parameter, factor ** 2, range);
     better ??= profile.better;
-    const toQuantity = (end: number | null) => (end === null ? null : nominal + sensitivity * end);
-    return { u, degreesOfFreedom, interval: [toQuantity(profile.lower), toQuantity(profile.upper)], profile };
+    const toQuantity = (end: number) => nominal + sensitivity * end;
+    const ends = [profile.lower, profile.upper].map((end) => (end === null ? null : toQuantity(end)));
+    const points = profile.points.map(({ value, rise }) => ({ value: toQuantity(value), rise }));
+    // A negative sensitivity turns the profile round.
+    if (sensitivity < 0) {
+      ends.reverse();
+      points.reverse();
+    }
+    return { u, degreesOfFreedom, interval: [ends[0], ends[1]], points };
   });
   return { quantities, better, curveEvaluations: minimum.problem.curveEvaluations };
 }

@@ -21,6 +21,7 @@ export type DoubtCode =
   | 'residuals-wander'
   | 'noise-far-above-usual'
   | 'rests-on-assumption'
+  | 'declaration-contradicted'
   | 'activity-out-of-range'
   | 'temperature-out-of-range'
   | 'starts-disagree'

@@ -55,7 +55,7 @@ export function describeQuantities(
     if (!(degreesOfFreedom > 0)) return { ...without, value: numberOrNull(value), whyNoU: 'no-degrees-of-freedom' };
 
     const [lower, upper] = found.interval;
-    const profile = found.profile?.points.filter(({ rise }) => Number.isFinite(rise)) ?? [];
+    const profile = found.points.filter(({ rise }) => Number.isFinite(rise));
     const open = { ...without, value: null, constant: null, profile };
     if (found.u === null || (lower === null && upper === null)) return { ...open, whyNoU: 'undetermined' };
     const gradient = unitGradient(weighted, q, parameterCount);

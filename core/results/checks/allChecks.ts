@@ -6,6 +6,7 @@ import { beyondReach } from './beyondReach.ts';
 import { carbonateLikely } from './carbonateLikely.ts';
 import { concentrationOfNothing } from './concentrationOfNothing.ts';
 import { constantsOverlap } from './constantsOverlap.ts';
+import { declarationContradicted } from './declarationContradicted.ts';
 import { declaredNoiseTooSmall } from './declaredNoiseTooSmall.ts';
 import { electrodeLikelyOff } from './electrodeLikelyOff.ts';
 import { fewPoints } from './fewPoints.ts';
@@ -52,5 +53,6 @@ export const allChecks: readonly ((analysis: Analysis) => Doubt[])[] = [
   intervalsDisagree,
   activityOutOfRange,
   temperatureOutOfRange,
+  declarationContradicted,
   restsOnAssumption,
 ];

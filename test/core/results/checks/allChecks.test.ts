@@ -228,3 +228,17 @@ describe('restsOnAssumption', () => {
     expect(concentration?.restsOn).toEqual(['sample.volume']);
   });
 });
+
+describe('declarationContradicted', () => {
+  it('says what the run makes of a strength that was declared wrongly', () => {
+    const declared = fitExperiment(acid, { titrant: { concentration_M: { value: 0.104, u: 0.0002 } } });
+    expect(doubtsOf(declared, 'declaration-contradicted').map(({ place }) => place.quantity)).toContain(
+      'titrant.concentration',
+    );
+  });
+
+  it('is silent where the run agrees with what is known', () => {
+    const result = fitExperiment(acid, { titrant: { concentration_M: { value: 0.1, u: 0.0005 } } });
+    expect(doubtsOf(result, 'declaration-contradicted')).toEqual([]);
+  });
+});
