@@ -55,11 +55,14 @@ const POSSIBLE: Readonly<Record<Kind, readonly [lowest: number, highest: number]
   temperature: [-20, 120],
 };
 
+/** Settings are short lines; what stands further on is not looked at, so that no line can hold up the rest. */
+const LONGEST_READ = 200;
+
 /** What lines beside the tables seem to say about the set-up; one value per key, the first that is found. */
 export function setUpSuggestions(lines: readonly TextLine[], marks: NumberMarks): readonly SetUpSuggestion[] {
   const found = new Map<SuggestedKey, SetUpSuggestion>();
   for (const { line, text } of lines) {
-    for (const part of partsOf(text)) {
+    for (const part of partsOf(text.slice(0, LONGEST_READ))) {
       const suggestion = suggestionIn(part, marks);
       if (suggestion !== undefined && !found.has(suggestion.key)) {
         found.set(suggestion.key, { ...suggestion, line, text });
