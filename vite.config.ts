@@ -63,6 +63,9 @@ export default defineConfig(({ mode }) => {
             include: ['test/**/*.test.{ts,tsx}'],
             exclude: ['test/browser/**'],
             sequence: { groupOrder: 0 },
+            // Nothing here is timed: a busy machine is slow, not wrong.
+            testTimeout: 60_000,
+            hookTimeout: 60_000,
           },
         },
         {
