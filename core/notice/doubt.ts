@@ -22,6 +22,7 @@ export type DoubtCode =
   | 'noise-far-above-usual'
   | 'rests-on-assumption'
   | 'declaration-contradicted'
+  | 'readings-drifting'
   | 'activity-out-of-range'
   | 'temperature-out-of-range'
   | 'starts-disagree'

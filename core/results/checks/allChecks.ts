@@ -23,6 +23,7 @@ import { restsOnAssumption } from './restsOnAssumption.ts';
 import { sensorStuck } from './sensorStuck.ts';
 import { solidLikely } from './solidLikely.ts';
 import { startsDisagree } from './startsDisagree.ts';
+import { stillDrifting } from './stillDrifting.ts';
 import { temperatureOutOfRange } from './temperatureOutOfRange.ts';
 import { unidentifiable } from './unidentifiable.ts';
 import { volumesDisagree } from './volumesDisagree.ts';
@@ -53,6 +54,7 @@ export const allChecks: readonly ((analysis: Analysis) => Doubt[])[] = [
   intervalsDisagree,
   activityOutOfRange,
   temperatureOutOfRange,
+  stillDrifting,
   declarationContradicted,
   restsOnAssumption,
 ];
