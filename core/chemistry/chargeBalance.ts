@@ -141,7 +141,8 @@ export class ChargeBalance {
       this.inverseSum[s] = inverse;
       this.meanLost[s] = meanLost;
 
-      const reference = Math.round(meanLost);
+      // Constants far off any scale overflow the weights; the balance is then no number, and must not become a loop.
+      const reference = meanLost <= groups ? Math.round(meanLost) : groups;
       excess += concentration * (z0 - reference);
       let taken = 0;
       let takenByX = 0;
