@@ -141,8 +141,10 @@ export class ChargeBalance {
       this.inverseSum[s] = inverse;
       this.meanLost[s] = meanLost;
 
-      // Constants far off any scale overflow the weights; the balance is then no number, and must not become a loop.
-      const reference = meanLost <= groups ? Math.round(meanLost) : groups;
+      // Constants far off any scale overflow the weights: the balance is no number then, and must not become a loop.
+      const overflows = !(meanLost <= groups);
+      if (overflows) gained = Number.NaN;
+      const reference = overflows ? 0 : Math.round(meanLost);
       excess += concentration * (z0 - reference);
       let taken = 0;
       let takenByX = 0;
