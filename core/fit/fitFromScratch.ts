@@ -22,8 +22,6 @@ const sameObjective = 1e-3;
 /** A fit without help from the user. */
 export interface FitFromScratch {
   readonly fit: ProblemFit;
-  /** Number of different minima among the ends of the best starts. */
-  readonly minima: number;
   /** The next best of them; null where all starts ended in one place. */
   readonly runnerUp: ProblemFit | null;
 }
@@ -37,7 +35,7 @@ export function fitFromScratch(problem: Problem): FitFromScratch {
       ? starts
       : distinct(starts.slice(0, fittedStarts).map((start) => fitProblem(few, start))).map((fit) => fit.parameters);
   const fits = distinct(ends.slice(0, fittedEnds).map((start) => fitProblem(problem, start)));
-  return { fit: fits[0], minima: fits.length, runnerUp: fits[1] ?? null };
+  return { fit: fits[0], runnerUp: fits[1] ?? null };
 }
 
 /**

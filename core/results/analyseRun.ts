@@ -92,7 +92,7 @@ function fitFromLadder(problem: Problem, ladder: Ladder | null, groups: number):
   const better =
     endings[fit.ending].usable &&
     (!endings[alone.fit.ending].usable || objectiveOf(fit) < objectiveOf(alone.fit) - sameObjective);
-  return better ? { fit, minima: alone.minima + 1, runnerUp: alone.fit } : alone;
+  return better ? { fit, runnerUp: alone.fit } : alone;
 }
 
 /** Two objectives closer than this are the same minimum. */
